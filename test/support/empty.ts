@@ -1,0 +1,2 @@
+/** Stands in for `server-only`, which throws in plain Node. */
+export {}
