@@ -25,7 +25,7 @@ function write(value: unknown, place: string): string {
     return `[${value.map((item, index) => write(item, `${place}[${index}]`)).join(',')}]`
   }
   if (typeof value === 'object' && isPlain(value)) return writeObject(value, place)
-  throw new TypeError(`${place}: ${describe(value)} has no canonical JSON`)
+  throw new TypeError(`${place}: ${nameOf(value)} has no canonical JSON`)
 }
 
 function writeNumber(value: number, place: string): string {
@@ -53,7 +53,7 @@ function isPlain(value: object): value is Readonly<Record<string, unknown>> {
   return prototype === Object.prototype || prototype === null
 }
 
-function describe(value: unknown): string {
+function nameOf(value: unknown): string {
   if (typeof value === 'object' && value !== null)
     return `an object of class ${value.constructor?.name ?? '?'}`
   return typeof value
