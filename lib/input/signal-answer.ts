@@ -1,0 +1,12 @@
+import { z } from 'zod'
+import { paragraphs, plainText } from './plain-text'
+
+export const answerSignalSchema = z.strictObject({
+  /** What was found: "die 7 worn". */
+  cause: plainText('Cause', { min: 3, max: 200 }),
+  /** What was done about it. */
+  answer: paragraphs('Answer', { min: 3 }),
+  version: z.int().min(1),
+})
+
+export type AnswerSignalInput = z.output<typeof answerSignalSchema>
