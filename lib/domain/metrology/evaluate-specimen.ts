@@ -1,0 +1,83 @@
+import { roundArea } from '../strings/round-section'
+import { breakingLoad, tensileStrengthAt } from '../strings/strength'
+import { type CharacteristicId, characteristicIds } from './characteristics'
+import type { BudgetLine, Estimate, EvaluationContext, SpecimenEvaluation } from './evaluation'
+import { evaluationCorrections } from './evaluation-corrections'
+import { evaluationInputs } from './evaluation-inputs'
+import { type ModelFacts, type ModelOutcome, measurementModel, modelFacts } from './measurement-model'
+import { MODEL_VERSION } from './model-version'
+import { propagate } from './propagate'
+import type { SpecimenSheet } from './sheet'
+
+/**
+ * All results of one specimen, with uncertainty, budgets and corrections, from what was read and what the
+ * works knows. The one function that runs in the browser while a person types and on the server when the
+ * specimen is stored: equal to the last bit. A partial sheet gives the results that can be had, and `missing`
+ * says what the others wait for.
+ *
+ * Throws a RangeError when a reading is not above zero: the schemas at the edges refuse such readings.
+ */
+export function evaluateSpecimen(sheet: SpecimenSheet, context: EvaluationContext): SpecimenEvaluation {
+  const facts = modelFacts(sheet, context)
+  const outcome = measurementModel(facts, {})
+  const inputs = evaluationInputs(facts, outcome.steps)
+  const propagated = propagate<CharacteristicId>(inputs, (values) => measurementModel(facts, values).results)
+  const results: Partial<Record<CharacteristicId, Estimate>> = {}
+  const budgets: Partial<Record<CharacteristicId, readonly BudgetLine[]>> = {}
+  for (const id of characteristicIds) {
+    const one = propagated[id]
+    if (!one) continue
+    results[id] = one.estimate
+    budgets[id] = one.budget
+  }
+  return {
+    modelVersion: MODEL_VERSION,
+    results,
+    budgets,
+    corrections: evaluationCorrections(facts, outcome),
+    steps: shownSteps(facts, outcome),
+    missing: missingParts(facts, outcome),
+  }
+}
+
+function shownSteps(facts: ModelFacts, { steps }: ModelOutcome): Readonly<Record<string, number>> {
+  const { material, specification } = facts.context
+  const strength = tensileStrengthAt(material, specification.diameter.target)
+  const breaking = strength && breakingLoad(strength.low, roundArea(specification.diameter.target))
+  const { axialStiffness, chain, force } = steps
+  return {
+    axialStiffness,
+    airDensity: facts.airDensity,
+    ...(facts.frequency ? { frequency: facts.frequency.value } : {}),
+    ...(force === undefined ? {} : { force }),
+    ...(chain ? { strain: chain.strain, inharmonicity: chain.inharmonicity } : {}),
+    ...(breaking === undefined ? {} : { breakingLoad: breaking }),
+    ...(breaking === undefined || force === undefined ? {} : { workingFraction: force / breaking }),
+  }
+}
+
+function missingParts(
+  { context, frequency, load, sheet, unknownWeights }: ModelFacts,
+  outcome: ModelOutcome,
+) {
+  const { results } = outcome
+  const missing: string[] = []
+  if (results.diameter === undefined) missing.push('No diameter has been read.')
+  else if (!context.micrometer) missing.push('No micrometer is named: its uncertainty is not in the budget.')
+  if (results.massPerMetreWeighed === undefined) {
+    if (!sheet.cutMass) missing.push('The piece has not been weighed.')
+    if (!sheet.cutLength) missing.push('The length of the piece is missing.')
+    if (sheet.weighedState === 'marked' && !load)
+      missing.push('The load under which it was marked is missing.')
+  } else {
+    if (!context.balance) missing.push('No balance is named: its uncertainty is not in the budget.')
+    if (!context.rule) missing.push('No rule is named: its uncertainty is not in the budget.')
+  }
+  if (results.massPerMetreSounded === undefined) {
+    if (!frequency) missing.push('The string has not been sounded.')
+    if (unknownWeights.length > 0) missing.push(`Not registered: ${unknownWeights.join(', ')}.`)
+    else if (!load) missing.push('What hangs is not said.')
+    if (!context.rig) missing.push('No rig is named.')
+  } else if (!context.counter) missing.push('No counter is named: its uncertainty is not in the budget.')
+  return missing
+}
