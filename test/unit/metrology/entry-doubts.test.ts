@@ -1,0 +1,121 @@
+import fc from 'fast-check'
+import { describe, expect, it } from 'vitest'
+import { doubtDigits, doubtFrequency, doubtMass, type EntryFacts } from '@/lib/domain/metrology/entry-doubts'
+import { understandEntry } from '@/lib/domain/metrology/understand-entry'
+
+const diameter = {
+  dimension: 'length',
+  unit: 'mm',
+  name: 'Diameter',
+  min: 1e-5,
+  max: 0.02,
+  expected: 254e-6,
+} as const
+
+describe('understandEntry(text, reading)', () => {
+  it.each([
+    ['.2541', 'mm', 254.1e-6],
+    ['0,254', 'mm', 254e-6],
+    ['254', 'µm', 254e-6],
+    ['254.3', 'µm', 254.3e-6],
+    ['.010', 'in', 254e-6],
+    ['10', 'thou', 254e-6],
+    ['10.06 thou', 'thou', 255.524e-6],
+    ['0.3 mm', 'mm', 300e-6],
+  ])('reads %s as %s for a wire of 0.254 mm', (text, unit, si) => {
+    const entry = understandEntry(text, diameter)
+    expect(entry.ok && entry.value.unit).toBe(unit)
+    expect(entry.ok && entry.value.si).toBeCloseTo(si, 15)
+  })
+
+  it('keeps the default unit where none fits, so that the entry is asked about', () => {
+    const entry = understandEntry('0.5', diameter)
+    expect(entry.ok && entry.value.unit).toBe('mm')
+  })
+
+  it.each(['', 'abc', '0.2.5', '1,000.5'])('refuses %j with a sentence', (text) => {
+    const entry = understandEntry(text, diameter)
+    expect(entry.ok).toBe(false)
+    expect(!entry.ok && entry.problems[0]?.message).toMatch(/^Diameter/)
+  })
+
+  it('never changes a value that has its unit', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 0.05, max: 5, noNaN: true }), (x) => {
+        const text = `${x.toFixed(4)} mm`
+        const entry = understandEntry(text, diameter)
+        expect(entry.ok && entry.value.si).toBeCloseTo(Number(x.toFixed(4)) / 1000, 12)
+      }),
+    )
+  })
+})
+
+const frequency = (typed: string): EntryFacts => ({
+  name: 'Frequency',
+  unit: 'Hz',
+  decimals: 2,
+  typed,
+  si: Number(typed),
+  expected: 328.5,
+  usual: 0.015,
+  because: '7.4 kg on 648 mm should sound near 328.5 Hz.',
+})
+
+describe('doubtFrequency(facts)', () => {
+  it.each([
+    ['164.2', 'an octave low', '328.4'],
+    ['657.0', 'an octave high', '328.5'],
+    ['985.2', 'the third partial', '328.4'],
+    ['109.6', 'a third of the fundamental', '328.8'],
+  ])('asks about %s: %s', (typed, words, meant) => {
+    const doubt = doubtFrequency(frequency(typed))
+    expect(doubt?.question).toContain(words)
+    expect(doubt?.choices).toContainEqual({ kind: 'meant', si: Number(meant), typed: meant })
+  })
+
+  it('lets ordinary values pass, and never asks without a way to keep the value', () => {
+    expect(doubtFrequency(frequency('328.9'))).toBeUndefined()
+    fc.assert(
+      fc.property(fc.double({ min: 20, max: 3000, noNaN: true }), (f) => {
+        const doubt = doubtFrequency(frequency(f.toFixed(1)))
+        if (doubt) expect(doubt.choices.map((one) => one.kind)).toContain('keep')
+      }),
+    )
+  })
+})
+
+describe('doubtDigits(facts)', () => {
+  it('finds two neighbouring digits swapped, also across the decimal sign', () => {
+    const tight = { ...frequency('327.9'), expected: 329.7, usual: 0.002 }
+    expect(doubtDigits(tight)).toMatchObject({ kind: 'digits', choices: [{}, { typed: '329.7' }, {}] })
+    expect(doubtDigits({ ...tight, typed: '322.97', si: 322.97 })).toMatchObject({ kind: 'digits' })
+    expect(doubtDigits({ ...tight, typed: '337.29', si: 337.29, expected: 332.79 })).toMatchObject({
+      choices: [{}, { typed: '332.79' }, {}],
+    })
+  })
+
+  it('says nothing when the entry is ordinary though a swap would be ordinary too', () => {
+    expect(doubtDigits({ ...frequency('328.2'), usual: 0.02 })).toBeUndefined()
+  })
+
+  it('asks about a value far off that no swap explains', () => {
+    expect(doubtDigits(frequency('411.1'))).toMatchObject({ kind: 'far' })
+  })
+})
+
+describe('doubtMass(facts)', () => {
+  it('asks about ten times', () => {
+    const facts: EntryFacts = {
+      name: 'Cut mass',
+      unit: 'mg',
+      decimals: 1,
+      typed: '1991',
+      si: 1991e-6,
+      expected: 199e-6,
+      usual: 0.05,
+      because: '500 mm of this wire weigh about 199 mg.',
+    }
+    expect(doubtMass(facts)?.question).toContain('ten times too heavy')
+    expect(doubtMass({ ...facts, typed: '199.6', si: 199.6e-6 })).toBeUndefined()
+  })
+})
