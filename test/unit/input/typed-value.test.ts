@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { metres } from '@/lib/domain/units/quantity'
 import { parseInput } from '@/lib/input/parse-input'
-import { sheetBounds } from '@/lib/input/sheet'
+import { sheetBounds } from '@/lib/input/sheet-bounds'
 import { typedValue } from '@/lib/input/typed-value'
 
 const diameter = typedValue(sheetBounds.diameter, metres)
