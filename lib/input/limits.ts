@@ -1,9 +1,8 @@
 import { z } from 'zod'
 import { characteristicIds } from '@/lib/domain/metrology/characteristics'
+import { chartedStatistics } from '@/lib/domain/record/chart-history'
 import { instant } from './instant'
 import { codeText, paragraphs } from './plain-text'
-
-export const chartedStatistics = ['mean', 'within-lot-sd'] as const
 
 const leftOut = z.strictObject({
   lotCode: codeText('Lot'),

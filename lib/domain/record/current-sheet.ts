@@ -30,7 +30,8 @@ const emptyCurrent: CurrentSheet = { sheet: emptySheet, equipment: {}, sources: 
 /**
  * Folds the readings of one specimen, in the order they were recorded, into the sheet in force. A first entry
  * or an addition fills what is still empty; a correction replaces the act it is about, even by nothing, and
- * leaves the other acts alone. Each act brings its own equipment.
+ * leaves the other acts alone. Each act brings its own equipment; until it does, what was named for it counts (a
+ * piece marked under load needs the rig before it is sounded).
  */
 export const currentSheet = (readings: readonly ReadingFact[]): CurrentSheet =>
   readings.reduce(
@@ -61,7 +62,11 @@ function withAddition(current: CurrentSheet, reading: ReadingFact, act: Act): Cu
   if (!holdsAct(sheet, act))
     return holdsAct(reading.values, act)
       ? withAct(current, reading, act)
-      : { ...current, sheet: { ...sheet, ...setUp(reading.values, act), ...setUp(sheet, act) } }
+      : {
+          ...current,
+          sheet: { ...sheet, ...setUp(reading.values, act), ...setUp(sheet, act) },
+          equipment: { ...defined(equipmentOf(reading, act)), ...current.equipment },
+        }
   return act === 'section'
     ? { ...current, sheet: { ...sheet, diameters: withDiameters(sheet, reading.values) } }
     : current
@@ -87,13 +92,13 @@ function corrected(current: CurrentSheet, reading: ReadingFact): CurrentSheet {
 
 /** The act's values and equipment, taken whole from this reading. */
 function withAct(current: CurrentSheet, reading: ReadingFact, act: Act): CurrentSheet {
-  const { micrometer, balance, rule, rig, counter } = reading.equipment
   const part = reading.values
+  const equipment = { ...current.equipment, ...equipmentOf(reading, act) }
   const sources = { ...current.sources, [act]: reading.clientId }
   if (act === 'section')
     return {
       sheet: { ...current.sheet, diameters: sorted(part.diameters ?? []) },
-      equipment: { ...current.equipment, micrometer },
+      equipment,
       sources,
     }
   if (act === 'weighing')
@@ -104,14 +109,20 @@ function withAct(current: CurrentSheet, reading: ReadingFact, act: Act): Current
         cutLength: part.cutLength,
         cutMass: part.cutMass,
       },
-      equipment: { ...current.equipment, balance, rule },
+      equipment,
       sources,
     }
   return {
     sheet: { ...current.sheet, load: part.load, span: part.span, frequencies: part.frequencies ?? [] },
-    equipment: { ...current.equipment, rig, counter },
+    equipment,
     sources,
   }
+}
+
+function equipmentOf({ equipment }: ReadingFact, act: Act): EquipmentCodes {
+  const { micrometer, balance, rule, rig, counter } = equipment
+  if (act === 'section') return { micrometer }
+  return act === 'weighing' ? { balance, rule } : { rig, counter }
 }
 
 /** Values that belong to no single act, where there are any. */

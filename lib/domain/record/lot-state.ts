@@ -1,3 +1,5 @@
+import type { DispositionVerb } from '../quality/propose-disposition'
+
 /** Where a lot stands. */
 export const lotStates = [
   'measuring',
@@ -11,10 +13,6 @@ export const lotStates = [
 ] as const
 
 export type LotState = (typeof lotStates)[number]
-
-export const dispositionVerbs = ['release', 'hold', 'rework', 'regrade', 'concession', 'scrap'] as const
-
-export type DispositionVerb = (typeof dispositionVerbs)[number]
 
 export const stateAfter: Readonly<Record<DispositionVerb, LotState>> = {
   release: 'released',
