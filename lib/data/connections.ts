@@ -42,7 +42,8 @@ export const sqlitePragmas = (role: ConnectionRole): ReadonlyArray<readonly [str
   ['query_only', role === 'reader' ? 1 : 0],
 ]
 
-type Ask = (sql: string) => Promise<unknown> | unknown
+/** Runs one statement; answers with the first column of the first row. */
+export type Ask = (sql: string) => Promise<unknown>
 
 const mustAnswer = (setting: string, wanted: string | number, answer: unknown): void => {
   // Either engine's driver may answer with a number, a bigint or a text.
@@ -52,7 +53,8 @@ const mustAnswer = (setting: string, wanted: string | number, answer: unknown): 
   )
 }
 
-const settlePragmas = async (role: ConnectionRole, ask: Ask): Promise<void> => {
+/** Sets a connection's pragmas and reads them back. @throws Error when one does not take */
+export const settlePragmas = async (role: ConnectionRole, ask: Ask): Promise<void> => {
   for (const [pragma, value] of sqlitePragmas(role)) await ask(`PRAGMA ${pragma} = ${value}`)
   for (const [pragma, value] of sqlitePragmas(role)) mustAnswer(pragma, value, await ask(`PRAGMA ${pragma}`))
 }
@@ -75,6 +77,30 @@ export const openSqlite = (path: string, role: ConnectionRole = 'script'): Bette
   }
 }
 
+/**
+ * A connection that only looks at a database file and leaves it as it is, its journal mode included: for copies
+ * and back-ups.
+ */
+export const inspectSqlite = (path: string): BetterSqlite3.Database => {
+  const connection = new BetterSqlite3(path, { fileMustExist: true, timeout: busyTimeouts.script })
+  try {
+    connection.pragma('query_only = 1')
+    mustAnswer('query_only', 1, connection.pragma('query_only', { simple: true }))
+    return connection
+  } catch (error) {
+    connection.close()
+    throw error
+  }
+}
+
+/** An adapter's way to answer one statement. */
+export const askerOf =
+  (adapter: SqlDriverAdapter): Ask =>
+  async (sql) => {
+    const { rows } = await adapter.queryRaw({ sql, args: [], argTypes: [] })
+    return rows[0]?.[0]
+  }
+
 const sqliteFactory = (path: string, role: ConnectionRole): SqlDriverAdapterFactory => {
   const factory = new PrismaBetterSqlite3(
     { url: `file:${path}`, fileMustExist: true, timeout: busyTimeouts[role] },
@@ -86,10 +112,7 @@ const sqliteFactory = (path: string, role: ConnectionRole): SqlDriverAdapterFact
     connect: async () => {
       const adapter = await factory.connect()
       try {
-        await settlePragmas(role, async (sql) => {
-          const { rows } = await adapter.queryRaw({ sql, args: [], argTypes: [] })
-          return rows[0]?.[0]
-        })
+        await settlePragmas(role, askerOf(adapter))
       } catch (error) {
         await adapter.dispose()
         throw error
@@ -136,10 +159,9 @@ const postgresqlFactory = (url: string, role: ConnectionRole): SqlDriverAdapterF
     connect: async (): Promise<SqlDriverAdapter> => {
       const adapter = await factory.connect()
       try {
-        for (const [name, value] of Object.entries(postgresqlSettings(role))) {
-          const { rows } = await adapter.queryRaw({ sql: `SHOW ${name}`, args: [], argTypes: [] })
-          mustAnswer(name, value.toLowerCase(), rows[0]?.[0])
-        }
+        const ask = askerOf(adapter)
+        for (const [name, value] of Object.entries(postgresqlSettings(role)))
+          mustAnswer(name, value.toLowerCase(), await ask(`SHOW ${name}`))
       } catch (error) {
         await adapter.dispose()
         throw error
