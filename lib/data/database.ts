@@ -6,7 +6,7 @@
  * request's transaction is open lands inside it, is acknowledged, and vanishes when that one rolls back.
  */
 import { connectionFactory } from './connections'
-import { isBusy, isSerialisationFailure, storageProblem } from './db-errors'
+import { isBusy, isReadOnlyRefusal, isSerialisationFailure, storageProblem } from './db-errors'
 import { type Environment, requireEnvironment } from './env'
 import { PrismaClient as PostgresqlClient } from './generated/postgresql/client'
 import { PrismaClient } from './generated/sqlite/client'
@@ -83,7 +83,10 @@ export const openDatabase = (
       if (inside.getStore()?.open) throw nested(`database().read.${nameOf(call)}`)
       if (!isReading(call)) throw new Error(`database().read does not write: ${nameOf(call)} was called.`)
     },
-    failure: (error) => storageProblem(error) ?? error,
+    failure: (error) =>
+      isReadOnlyRefusal(error)
+        ? new Error('database().read does not write: a raw query tried to.', { cause: error })
+        : (storageProblem(error) ?? error),
   })
 
   /** One transaction from beginning to end. */

@@ -46,6 +46,10 @@ export const isBusy = (error: unknown): boolean =>
 export const isSerialisationFailure = (error: unknown): boolean =>
   codesOf(error).some((code) => code === 'P2034' || code === '40001' || code === '40P01')
 
+/** A connection that only reads was asked to write. */
+export const isReadOnlyRefusal = (error: unknown): boolean =>
+  codesOf(error).some((code) => code === 'SQLITE_READONLY' || code === '25006')
+
 const isFull = (error: unknown): boolean =>
   codesOf(error).some((code) => ['SQLITE_FULL', '53100', 'ENOSPC'].includes(code))
 
