@@ -49,7 +49,7 @@ const select = {
   version: true,
 } as const
 
-export const getWorksRow = async (tx: Tx): Promise<WorksRow | undefined> => {
+export const getWorks = async (tx: Tx): Promise<WorksRow | undefined> => {
   const row = await tx.works.findUnique({ where: { id }, select })
   return row ? { ...row, gravityTyped: row.gravityTyped ?? undefined } : undefined
 }
