@@ -73,7 +73,7 @@ export function planSpecimenWrite(
     summaries: outcome.summaries,
     signals: outcome.signals,
     evidenceChanged: outcome.evidenceChanged,
-    ledger: touched.length === 0 ? [] : [ledgerDraft(state, touched, outcome, actor, at)],
+    ledger: touched.length === 0 ? undefined : ledgerDraft(state, touched, outcome, actor, at),
     alreadyThere,
   })
 }
@@ -190,8 +190,8 @@ function ledgerDraft(
     at,
     personId: actor.personId,
     verb: corrected ? 'supersede-reading' : 'record-specimens',
-    subject: `lot:${state.lot.code}`,
-    body: canonicalJson({
+    subject: `lot ${state.lot.code}`,
+    body: {
       lot: state.lot.code,
       state: { from: state.lot.state, to: outcome.lot.state },
       specimens: touched.map(({ entry, after, rows }) => ({
@@ -220,6 +220,6 @@ function ledgerDraft(
         ...chart.changed.map((one) => ({ id: one.id, state: one.state })),
       ]),
       evidenceChanged: outcome.evidenceChanged,
-    }),
+    },
   }
 }

@@ -24,7 +24,8 @@ export interface SpecimenWritePlan {
     readonly dispositions: readonly number[]
     readonly datasheetRevisions: readonly number[]
   }
-  readonly ledger: readonly LedgerDraft[]
+  /** Undefined when nothing was written. */
+  readonly ledger: LedgerDraft | undefined
   /** Numbers of specimens whose entry was there already. */
   readonly alreadyThere: readonly number[]
 }
@@ -108,6 +109,5 @@ export interface LedgerDraft {
   readonly personId: number | null
   readonly verb: string
   readonly subject: string
-  /** Canonical JSON. */
-  readonly body: string
+  readonly body: Readonly<Record<string, unknown>>
 }
