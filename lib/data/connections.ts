@@ -9,20 +9,31 @@ import { PrismaPg } from '@prisma/adapter-pg'
 import type { SqlDriverAdapter, SqlDriverAdapterFactory } from '@prisma/driver-adapter-utils'
 import BetterSqlite3 from 'better-sqlite3'
 import { type Environment, filePath } from './env'
-import { beginImmediately } from './sqlite-transactions'
+import { takeTurns } from './sqlite-transactions'
 
 /** What a connection is for: decides how long it waits, and whether it may write. */
 export type ConnectionRole = 'writer' | 'reader' | 'sign-in' | 'script'
 
 /**
  * Milliseconds that SQLite waits for another connection's lock. It waits in the server's only thread, so the
- * server's own connections wait briefly and try again later (`database.ts`, `sign-in-client.ts`).
+ * server's own connections wait briefly and try again later.
  */
 const busyTimeouts: Readonly<Record<ConnectionRole, number>> = {
   writer: 20,
-  reader: 1_000,
+  reader: 20,
   'sign-in': 20,
   script: 10_000,
+}
+
+/**
+ * Milliseconds that a connection tries again, without stopping the server. The writer's door repeats whole
+ * transactions instead.
+ */
+const busyPatience: Readonly<Record<ConnectionRole, number>> = {
+  writer: 0,
+  reader: 5_000,
+  'sign-in': 15_000,
+  script: 0,
 }
 
 /** Pages of the log after which it is copied back, and the size it is cut to: the log stays bounded. */
@@ -117,7 +128,7 @@ const sqliteFactory = (path: string, role: ConnectionRole): SqlDriverAdapterFact
         await adapter.dispose()
         throw error
       }
-      return beginImmediately(adapter)
+      return takeTurns(adapter, busyPatience[role])
     },
   }
 }
@@ -134,7 +145,13 @@ export const postgresqlSettings = (role: ConnectionRole): Readonly<Record<string
   idle_in_transaction_session_timeout: role === 'script' ? '0' : '1min',
 })
 
-const poolSizes: Readonly<Record<ConnectionRole, number>> = { writer: 8, reader: 6, 'sign-in': 3, script: 2 }
+/** Connections of a role on PostgreSQL. */
+export const poolSizes: Readonly<Record<ConnectionRole, number>> = {
+  writer: 8,
+  reader: 6,
+  'sign-in': 3,
+  script: 2,
+}
 
 /** What node-postgres needs to connect in a role. */
 export const postgresqlConfig = (url: string, role: ConnectionRole) => ({

@@ -6,7 +6,13 @@
  * request's transaction is open lands inside it, is acknowledged, and vanishes when that one rolls back.
  */
 import { connectionFactory } from './connections'
-import { isBusy, isReadOnlyRefusal, isSerialisationFailure, storageProblem } from './db-errors'
+import {
+  isBusy,
+  isReadOnlyRefusal,
+  isSerialisationFailure,
+  storageProblem,
+  uniqueViolation,
+} from './db-errors'
 import { type Environment, requireEnvironment } from './env'
 import { PrismaClient as PostgresqlClient } from './generated/postgresql/client'
 import { PrismaClient } from './generated/sqlite/client'
@@ -41,9 +47,11 @@ export interface Patience {
   readonly transaction: number
   /** How long to try for the file when another connection holds it. */
   readonly busy: number
+  /** How long the client may take to begin a transaction: queues wait outside it, at the lock. */
+  readonly begin: number
 }
 
-const usualPatience: Patience = { transaction: 20_000, busy: 20_000 }
+const usualPatience: Patience = { transaction: 20_000, busy: 20_000, begin: 5_000 }
 
 const pauseMilliseconds = 15
 const mostAttempts = 8
@@ -129,7 +137,7 @@ export const openDatabase = (
                 state.open = false
               }),
             ),
-          { maxWait: patience.busy, timeout: patience.transaction },
+          { maxWait: patience.begin, timeout: patience.transaction },
         ),
         overdue,
       ])
@@ -149,7 +157,9 @@ export const openDatabase = (
         const again =
           engine === 'sqlite'
             ? isBusy(error) && Date.now() < until
-            : isSerialisationFailure(error) && count < mostAttempts
+            : (isSerialisationFailure(error) && count < mostAttempts) ||
+              // Another transaction inserted the same meanwhile: looked up again, it is there.
+              (uniqueViolation(error) !== undefined && count === 1)
         if (!again) throw storageProblem(error) ?? error
         await pause(engine === 'sqlite' ? pauseMilliseconds : pauseMilliseconds * count)
       }
@@ -162,8 +172,7 @@ export const openDatabase = (
     write: async (work) => {
       const state = inside.getStore()
       if (state) throw state.open ? nested('database().write') : afterEnd('database().write')
-      // On PostgreSQL each transaction has its own connection, and rows are locked instead (locks.ts).
-      return engine === 'sqlite' ? writeLock.run(() => attempts(work)) : attempts(work)
+      return writeLock[engine].run(() => attempts(work))
     },
     close: async () => {
       const shared = sharedState()

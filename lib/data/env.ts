@@ -53,10 +53,10 @@ const variables = z.object({
   DATABASE_URL: optional(
     z
       .string()
-      .refine(
-        (url) => /^file:./.test(url) || /^postgres(?:ql)?:\/\//.test(url),
-        'starts neither with file: nor with postgresql://',
-      )
+      .refine((url) => /^file:./.test(url) || /^postgres(?:ql)?:\/\//.test(url), {
+        error: 'starts neither with file: nor with postgresql://',
+        abort: true,
+      })
       .refine((url) => url.startsWith('file:') || URL.canParse(url), 'is not a complete address')
       .refine((url) => !url.startsWith('file:') || !/[?#]/.test(url), 'has options after the path'),
   ),

@@ -3,7 +3,8 @@
  * module's own variables would be several locks and several connections: they live on `globalThis`.
  */
 import { AsyncLocalStorage } from 'node:async_hooks'
-import type { Database } from './database'
+import { poolSizes } from './connections'
+import type { Database, Engine } from './database'
 import type { SignInClient } from './sign-in-client'
 import { createTurns, type Turns } from './turns'
 
@@ -16,8 +17,12 @@ export interface Inside {
 }
 
 interface SharedState {
-  /** The write lock of the embedded engine. */
-  readonly writeLock: Turns
+  /**
+   * The write lock. On the embedded engine one transaction at a time; on PostgreSQL as many as have a
+   * connection, while rows are locked (`locks.ts`). Either way a queue waits here, before its transactions
+   * begin: inside the client it would give up.
+   */
+  readonly writeLock: Readonly<Record<Engine, Turns>>
   readonly inside: AsyncLocalStorage<Inside>
   database: Database | undefined
   signIn: SignInClient | undefined
@@ -28,7 +33,7 @@ const key = Symbol.for('ledgerline.database')
 export const sharedState = (): SharedState => {
   const holder = globalThis as typeof globalThis & { [key]?: SharedState }
   holder[key] ??= {
-    writeLock: createTurns(),
+    writeLock: { sqlite: createTurns(), postgresql: createTurns(poolSizes.writer) },
     inside: new AsyncLocalStorage<Inside>(),
     database: undefined,
     signIn: undefined,

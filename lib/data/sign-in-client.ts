@@ -1,35 +1,24 @@
 /**
  * The sign-in library's own client: it issues plain writes whenever it likes, which on the shared connection
  * would land inside another request's transaction. On a connection of its own they can't. It waits for the
- * file only briefly, since that wait stops the whole server, and tries again.
+ * file only briefly, since that wait stops the whole server, and tries again (`sqlite-transactions.ts`).
  */
 import { connectionFactory } from './connections'
-import { isBusy } from './db-errors'
 import { requireEnvironment } from './env'
 import { PrismaClient as PostgresqlClient } from './generated/postgresql/client'
 import { PrismaClient } from './generated/sqlite/client'
 import { sharedState } from './shared-state'
 
-const patienceMilliseconds = 15_000
-const pauseMilliseconds = 20
-
-const pause = (milliseconds: number) => new Promise<void>((done) => setTimeout(done, milliseconds))
-
-const retryWhileBusy = async <T>(work: () => Promise<T>): Promise<T> => {
-  const until = Date.now() + patienceMilliseconds
-  for (;;) {
-    try {
-      return await work()
-    } catch (error) {
-      if (!isBusy(error) || Date.now() > until) throw error
-      await pause(pauseMilliseconds)
-    }
-  }
-}
+/** The sign-in library's few transactions wait as long for the file as its statements do. */
+const transactionOptions = { maxWait: 16_000, timeout: 10_000 }
 
 const open = () => {
   const environment = requireEnvironment()
-  const options = { adapter: connectionFactory(environment, 'sign-in'), errorFormat: 'minimal' } as const
+  const options = {
+    adapter: connectionFactory(environment, 'sign-in'),
+    errorFormat: 'minimal',
+    transactionOptions,
+  } as const
   const client =
     environment.engine === 'sqlite'
       ? new PrismaClient(options)
@@ -43,7 +32,7 @@ const open = () => {
           throw new Error(
             `Sign-in (${model ?? ''}.${operation}) inside database().write: end the transaction first.`,
           )
-        return retryWhileBusy(() => query(args))
+        return query(args)
       },
     },
   })

@@ -1,28 +1,50 @@
 /**
- * Transactions on SQLite that take the write lock when they begin.
+ * One SQLite connection shared by many requests, made safe.
  *
- * The driver begins deferred transactions: one that reads first and writes later fails at once when another
- * connection wrote in between. It also leaves a connection inside its transaction when COMMIT finds the file
- * busy, so that later writes vanish with it, and never hands the turn on when BEGIN fails. Here BEGIN is
- * IMMEDIATE, a transaction that did not commit is rolled back for certain, and the turn is always handed on.
+ * The driver's own adapter lets a plain statement land inside whatever transaction is open on the connection:
+ * acknowledged, then gone when that one rolls back. It begins deferred transactions, which fail at once when
+ * they read first and another connection wrote in between; stays inside a transaction whose COMMIT found the
+ * file busy, so that later writes vanish with it; and never hands the turn on when BEGIN fails. Here statements
+ * and transactions take turns, BEGIN is IMMEDIATE, what did not commit is rolled back for certain, and the turn
+ * is always handed on.
  */
+import { setTimeout as pause } from 'node:timers/promises'
 import type { IsolationLevel, SqlDriverAdapter, Transaction } from '@prisma/driver-adapter-utils'
+import { isBusy } from './db-errors'
 import { createTurns } from './turns'
 
-/** Wraps an adapter: everything but `startTransaction` is its own. */
-export const beginImmediately = (adapter: SqlDriverAdapter): SqlDriverAdapter => {
+const pauseMilliseconds = 15
+
+/**
+ * Wraps an adapter of one connection.
+ * @param busyPatience milliseconds to try again, without stopping the server, while another connection holds the
+ * file. Only what has done nothing yet is tried again: a statement outside a transaction, or BEGIN.
+ */
+export const takeTurns = (adapter: SqlDriverAdapter, busyPatience = 0): SqlDriverAdapter => {
   const turns = createTurns()
   const run = (sql: string) => adapter.executeRaw({ sql, args: [], argTypes: [] })
   const rollBackIfOpen = () => run('ROLLBACK').catch(() => undefined)
 
+  const whileBusy = async <T>(work: () => Promise<T>): Promise<T> => {
+    const until = Date.now() + busyPatience
+    for (;;) {
+      try {
+        return await work()
+      } catch (error) {
+        if (!isBusy(error) || Date.now() >= until) throw error
+        await pause(pauseMilliseconds)
+      }
+    }
+  }
+
   const startTransaction = async (isolationLevel?: IsolationLevel): Promise<Transaction> => {
     if (isolationLevel !== undefined && isolationLevel !== 'SERIALIZABLE')
       throw new Error(`SQLite has no isolation level ${isolationLevel}`)
-    const release = await turns.take()
+    const handOn = await turns.take()
     try {
-      await run('BEGIN IMMEDIATE')
+      await whileBusy(() => run('BEGIN IMMEDIATE'))
     } catch (error) {
-      release()
+      handOn()
       throw error
     }
     return {
@@ -32,10 +54,10 @@ export const beginImmediately = (adapter: SqlDriverAdapter): SqlDriverAdapter =>
       queryRaw: (query) => adapter.queryRaw(query),
       executeRaw: (query) => adapter.executeRaw(query),
       // The client has sent COMMIT or ROLLBACK already. After a COMMIT that failed it sends nothing more.
-      commit: async () => release(),
+      commit: async () => handOn(),
       rollback: async () => {
         await rollBackIfOpen()
-        release()
+        handOn()
       },
       createSavepoint: async (name) => {
         await run(`SAVEPOINT ${name}`)
@@ -52,9 +74,9 @@ export const beginImmediately = (adapter: SqlDriverAdapter): SqlDriverAdapter =>
   return {
     provider: adapter.provider,
     adapterName: adapter.adapterName,
-    queryRaw: (query) => adapter.queryRaw(query),
-    executeRaw: (query) => adapter.executeRaw(query),
-    executeScript: (script) => adapter.executeScript(script),
+    queryRaw: (query) => turns.run(() => whileBusy(() => adapter.queryRaw(query))),
+    executeRaw: (query) => turns.run(() => whileBusy(() => adapter.executeRaw(query))),
+    executeScript: (script) => turns.run(() => adapter.executeScript(script)),
     startTransaction,
     getConnectionInfo: adapter.getConnectionInfo?.bind(adapter),
     dispose: () => adapter.dispose(),

@@ -1,5 +1,6 @@
 /** Walks the ledger from its beginning and compares it with its head and with every anchor. */
-import type { Tx } from './database'
+import { openDatabase, type Tx } from './database'
+import type { Environment } from './env'
 import { beginningOfLedger, hashOfEntry, type LedgerHead } from './ledger'
 
 /** A state of the ledger that was written down elsewhere. */
@@ -101,5 +102,18 @@ export const verifyLedger = async (read: Tx, anchors: readonly Anchor[]): Promis
         `The ledger is shorter than it was: ${count} entries are there, ${beyond.count} when ${beyond.where} was made.`,
       )
     return { sound: true, count, hash, anchors: anchors.length }
+  }
+}
+
+/** The same for a database that this process has not open, with the anchors in it added. */
+export const verifyLedgerOf = async (
+  environment: Pick<Environment, 'engine' | 'databaseUrl'>,
+  anchors: readonly Anchor[],
+): Promise<LedgerVerdict> => {
+  const opened = openDatabase(environment)
+  try {
+    return await verifyLedger(opened.read, [...(await anchorsInDatabase(opened.read)), ...anchors])
+  } finally {
+    await opened.close()
   }
 }
