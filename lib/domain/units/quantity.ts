@@ -29,6 +29,15 @@ export type SquareMetres = Quantity<'square metres'>
 export type PerKelvin = Quantity<'per kelvin'>
 export type Degrees = Quantity<'degrees'>
 export type Cents = Quantity<'cents'>
+export type Joules = Quantity<'joules'>
+/** Bending stiffness EI. */
+export type NewtonSquareMetres = Quantity<'newton square metres'>
+/** Second moment of area. */
+export type MetresToTheFourth = Quantity<'metres to the fourth'>
+/** Kinematic viscosity. */
+export type SquareMetresPerSecond = Quantity<'square metres per second'>
+/** Viscous drag of a length of string. */
+export type KilogramsPerMetreSecond = Quantity<'kilograms per metre and second'>
 
 export const metres = door('metres')
 export const kilograms = door('kilograms')
@@ -45,3 +54,8 @@ export const squareMetres = door('square metres')
 export const perKelvin = door('per kelvin')
 export const degrees = door('degrees')
 export const cents = door('cents')
+export const joules = door('joules')
+export const newtonSquareMetres = door('newton square metres')
+export const metresToTheFourth = door('metres to the fourth')
+export const squareMetresPerSecond = door('square metres per second')
+export const kilogramsPerMetreSecond = door('kilograms per metre and second')
