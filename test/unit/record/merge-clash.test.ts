@@ -40,7 +40,7 @@ describe('mergeOf', () => {
       load: { kind: 'weights', hanger: 'H-01', weights: ['W-05'] } as const,
     }
     expect(mergeOf(stored, part, steelEquipment).clashes).toEqual([
-      { field: 'frequency', stored: '328.5 Hz', entered: '164.2 Hz, 164.3 Hz' },
+      { field: 'frequency', stored: '331.0 Hz', entered: '164.2 Hz, 164.3 Hz' },
       { field: 'load', stored: 'H-01 W-02 W-05', entered: 'H-01 W-05' },
     ])
   })

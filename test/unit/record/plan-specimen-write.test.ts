@@ -352,7 +352,7 @@ describe('live and stored results', () => {
 
   it('differ when one typed digit differs', () => {
     const one = planned(lotState(), [entryOf(1)]).evaluations[0]
-    const other = planned(lotState(), [entryOf(1, { frequencies: [typedHertz('328.6')] })]).evaluations[0]
+    const other = planned(lotState(), [entryOf(1, { frequencies: [typedHertz('331.1')] })]).evaluations[0]
     expect(other?.result).not.toEqual(one?.result)
     expect(other?.inputHash).not.toBe(one?.inputHash)
   })
