@@ -30,24 +30,27 @@ const decode = (value: string): string => {
   }
 }
 
+type Render = (actor: Actor, request: PageRequest) => Promise<ReactNode>
+
 /**
  * Every page of a room is made with this: finds the actor, calls `render`, and turns a service's refusal into
  * a page with its sentence. Call services in `render` itself, not in components below it: what those throw
  * is an unforeseen error.
  */
-export const roomPage = (render: (actor: Actor, request: PageRequest) => Promise<ReactNode>) =>
-  async function RoomPage({ params, searchParams }: PageProps): Promise<ReactNode> {
-    const actor = await requireActor()
-    const query = Object.entries(await searchParams).map(([name, value]) => [
-      name,
-      Array.isArray(value) ? value[0] : value,
-    ])
-    try {
-      return await render(actor, { params: decoded(await params), query: Object.fromEntries(query) })
-    } catch (error) {
-      if (!(error instanceof LedgerlineError)) throw error
-      if (error.problem.code === 'not-found') notFound()
-      if (error.problem.code === 'not-signed-in') redirect('/sign-in')
-      return <Refused problem={error.problem} />
-    }
+export const roomPage = (render: Render) => (props: PageProps) => answer(render, props)
+
+const answer = async (render: Render, { params, searchParams }: PageProps): Promise<ReactNode> => {
+  const actor = await requireActor()
+  const query = Object.entries(await searchParams).map(([name, value]) => [
+    name,
+    Array.isArray(value) ? value[0] : value,
+  ])
+  try {
+    return await render(actor, { params: decoded(await params), query: Object.fromEntries(query) })
+  } catch (error) {
+    if (!(error instanceof LedgerlineError)) throw error
+    if (error.problem.code === 'not-found') notFound()
+    if (error.problem.code === 'not-signed-in') redirect('/sign-in')
+    return <Refused problem={error.problem} />
   }
+}
