@@ -135,14 +135,16 @@ function rowShapes(
     return to > from ? [lines([[from, barY, to, barY]], { stroke: 'ink', width: 1.2 })] : []
   }
   const off = (route: GateRoute): -1 | 0 | 1 => (at(route.value) < 0 ? -1 : at(route.value) > RULE ? 1 : 0)
-  const mark = (route: GateRoute, markY: number, draw: (x: number) => Shape, word: string): Shape[] =>
-    off(route) === 0
-      ? [...bar(route, markY), draw(at(route.value))]
-      : offRule(
-          off(route),
-          markY,
-          `${word} ${formatNumber(route.value, { decimals: input.decimals, decimal: input.decimal })}, off the rule`,
-        )
+  const mark = (
+    route: GateRoute,
+    markY: number,
+    draw: (x: number) => Shape,
+    word: 'weighed' | 'sounded',
+  ): Shape[] => {
+    if (off(route) === 0) return [...bar(route, markY), draw(at(route.value))]
+    const value = formatNumber(route.value, { decimals: input.decimals, decimal: input.decimal })
+    return offRule(off(route), markY, word, `${word} ${value}, off the rule`)
+  }
   return [
     words(0, y - 1, specimen.label, { weight: 600 }),
     ...(gate
@@ -196,24 +198,25 @@ function rowShapes(
   ]
 }
 
-function offRule(side: -1 | 0 | 1, y: number, text: string): Shape[] {
+/** An arrow towards a value that the rule does not reach; the words keep clear of the rule's line. */
+function offRule(side: -1 | 0 | 1, y: number, word: 'weighed' | 'sounded', text: string): Shape[] {
   const [from, to] = side < 0 ? [90, 4] : [RULE - 90, RULE - 4]
   const back = side < 0 ? 7 : -7
+  const [arrowY, textY] = word === 'sounded' ? [y - 4, y + 8] : [y + 5, y - 1]
   return [
-    lines([[from, y, to, y]], { stroke: 'brass', width: 1.4 }),
+    lines([[from, arrowY, to, arrowY]], { stroke: 'brass', width: 1.4 }),
     polyline(
       [
-        [to + back, y - 4],
-        [to, y],
-        [to + back, y + 4],
+        [to + back, arrowY - 4],
+        [to, arrowY],
+        [to + back, arrowY + 4],
       ],
       { stroke: 'brass', width: 1.4 },
     ),
-    words(side < 0 ? 4 : RULE - 4, y - 7, text, {
+    words(side < 0 ? 4 : RULE - 6, textY, text, {
       anchor: side < 0 ? 'start' : 'end',
       ink: 'brass',
       weight: 600,
-      halo: true,
     }),
   ]
 }

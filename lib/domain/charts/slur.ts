@@ -42,16 +42,24 @@ export const slurPoint = (curve: SlurCurve, t: number, inset = 0): Point => [
   ),
 ]
 
-/** The nearest the inner edge of a slur comes to a point; negative when the point lies on its outer side. */
-export function slurClearance(curve: SlurCurve, [x, y]: Point): number {
+/** Signed distance from a point to the nearest of the points `near`; negative on the outer side of the slur. */
+function signedDistance(near: readonly Point[], [x, y]: Point, side: -1 | 1): number {
   let nearest = Number.POSITIVE_INFINITY
-  let at: Point = curve.start
-  for (let step = 0; step <= 96; step++) {
-    const [cx, cy] = slurPoint(curve, step / 96, TAPER)
+  let sign = 1
+  for (const [cx, cy] of near) {
     const distance = Math.hypot(cx - x, cy - y)
-    if (distance < nearest) [nearest, at] = [distance, [cx, cy]]
+    if (distance >= nearest) continue
+    nearest = distance
+    sign = (cy - y) * side < 0 ? -1 : 1
   }
-  return (at[1] - y) * curve.side < 0 ? -nearest : nearest
+  return sign * nearest
+}
+
+/** How near the inner edge of a slur comes to a point, px; negative when the point lies on its outer side. */
+export function slurClearance(curve: SlurCurve, point: Point): number {
+  const steps = Math.max(64, Math.ceil(curve.end[0] - curve.start[0]))
+  const edge = Array.from({ length: steps + 1 }, (_, step) => slurPoint(curve, step / steps, TAPER))
+  return signedDistance(edge, point, curve.side)
 }
 
 /** The curve over a base line that leans from end to end, its handles raised by `height`. */
@@ -70,15 +78,34 @@ function curveOf(first: Point, last: Point, side: -1 | 1, e1: number, e2: number
   }
 }
 
+/** A note and the parameters at which a slur passes over it: only these need looking at. */
+interface Neighbour {
+  readonly note: Point
+  readonly at: readonly number[]
+}
+
+function neighboursOf(notes: readonly Point[], flat: SlurCurve): Neighbour[] {
+  const steps = Math.max(48, Math.ceil((flat.end[0] - flat.start[0]) / 2))
+  const all = Array.from({ length: steps + 1 }, (_, step) => step / steps)
+  const placed = all.map((t) => [t, slurPoint(flat, t)[0]] as const)
+  return notes.map((note) => ({
+    note,
+    at: placed.filter(([, x]) => Math.abs(x - note[0]) <= CLEAR + 4).map(([t]) => t),
+  }))
+}
+
 /** The smallest height at which every inner note is clear, or undefined when it would not be below `most`. */
 function leastHeight(
-  notes: readonly Point[],
+  neighbours: readonly Neighbour[],
   of: (height: number) => SlurCurve,
   most: number,
 ): number | undefined {
   const isClear = (height: number): boolean => {
     const curve = of(height)
-    return notes.every((note) => slurClearance(curve, note) >= CLEAR)
+    return neighbours.every(({ note, at }) => {
+      const near = at.map((t) => slurPoint(curve, t, TAPER))
+      return signedDistance(near, note, curve.side) >= CLEAR
+    })
   }
   if (isClear(LEAST_HEIGHT)) return LEAST_HEIGHT
   if (!isClear(most)) return undefined
@@ -100,7 +127,7 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
   const first = notes[0]
   const last = notes.at(-1)
   if (!first || !last || notes.length < 2 || !(last[0] > first[0])) return undefined
-  const inner = notes.slice(1, -1)
+  const inner = neighboursOf(notes.slice(1, -1), curveOf(first, last, side, 0, 0, 0))
   const spread = Math.max(...notes.map(([, y]) => y)) - Math.min(...notes.map(([, y]) => y))
   let best: { cost: number; curve: SlurCurve } | undefined
   for (let e1 = END_OFFSET; e1 <= MOST_END_OFFSET; e1 += 2)

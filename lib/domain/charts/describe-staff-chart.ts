@@ -1,0 +1,47 @@
+import { sigmasText, valueText } from './readout'
+import type { ChartNote, StaffChart, StaveModel } from './staff-chart'
+
+const count = (many: number, one: string): string => `${many} ${one}${many === 1 ? '' : 's'}`
+
+function staveSentences(stave: StaveModel, chart: StaffChart): string[] {
+  const text = (value: number): string => valueText(value, stave, chart)
+  const newest = stave.segments.at(-1)
+  const last = stave.notes.at(-1)
+  const beyond = stave.notes.filter((note) => note.beyond)
+  const limits =
+    newest?.upper === undefined
+      ? (stave.withoutLimits ?? 'no limits')
+      : newest.lower === undefined
+        ? `limit set ${newest.number}, at most ${text(newest.upper)}`
+        : `limit set ${newest.number}, ${text(newest.lower)} to ${text(newest.upper)}`
+  const where = (note: ChartNote): string => `${note.code} ${text(note.value)}`
+  return [
+    `${stave.label}, ${stave.unitLabel}: ${limits}${newest?.provisional ? ', provisional' : ''}.`,
+    ...(last
+      ? [`Last lot ${where(last)}${last.sigmas === undefined ? '' : `, ${sigmasText(last.sigmas, chart)}`}.`]
+      : ['No values.']),
+    ...(beyond.length > 0 ? [`Beyond the limits: ${beyond.map(where).join(', ')}.`] : []),
+    ...stave.slurs.map(({ sentence, state }) =>
+      state === 'open' ? sentence : `${sentence} (${state === 'answered' ? 'answered' : 'no longer holds'})`,
+    ),
+  ]
+}
+
+/** The chart in words, for those who do not see it and for the picture's description. */
+export function describeStaffChart(chart: StaffChart): string {
+  const { from, to } = chart.window
+  const [first, last] = [chart.lots[from], chart.lots[to]]
+  if (!first || !last) return `${chart.title}: no lots yet.`
+  const range =
+    first === last
+      ? `One lot, ${first.code}`
+      : `${count(to - from + 1, 'lot')}, ${first.code} to ${last.code}`
+  const bars = chart.barLines.map(
+    ({ atIndex, reason }) => `${reason} before ${chart.lots[atIndex]?.code ?? ''}`,
+  )
+  return [
+    `${range}; ${count(chart.staves.length, 'characteristic')}.`,
+    ...chart.staves.flatMap((stave) => staveSentences(stave, chart)),
+    ...(bars.length > 0 ? [`Changes: ${bars.join('; ')}.`] : []),
+  ].join(' ')
+}

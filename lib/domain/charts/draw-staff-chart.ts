@@ -1,0 +1,63 @@
+import { labelShapes } from './chart-labels'
+import { describeStaffChart } from './describe-staff-chart'
+import { ledgerShapes, noteShapes, slurShapes } from './draw-notes'
+import {
+  barShapes,
+  footShapes,
+  futureShapes,
+  limitValueShapes,
+  staffShapes,
+  toleranceShapes,
+  unlimitedShapes,
+} from './draw-staff'
+import type { StaffLayout } from './layout-staff-chart'
+import { words } from './marks'
+import type { Drawing, Shape } from './shape'
+
+/** What lies in the plot, bottom first; positions follow the axes. */
+export function plotShapes(layout: StaffLayout): readonly Shape[] {
+  const each = <T>(of: (stave: StaffLayout['staves'][number], layout: StaffLayout) => readonly T[]): T[] =>
+    layout.staves.flatMap((stave) => of(stave, layout))
+  return [
+    ...futureShapes(layout),
+    ...each(staffShapes),
+    ...each(unlimitedShapes),
+    ...each(toleranceShapes),
+    ...barShapes(layout),
+    ...each(slurShapes),
+    ...each(ledgerShapes),
+    ...each(noteShapes),
+    ...labelShapes(layout),
+  ]
+}
+
+/** What stands around the plot: names of the staves, values at the right, reasons, lot axis. */
+export function marginShapes(layout: StaffLayout): readonly Shape[] {
+  const empty =
+    layout.chart.lots.length === 0
+      ? [words(layout.frame.x, layout.plot.y + 16, 'no lots yet', { italic: true, ink: 'slate' })]
+      : []
+  return [
+    ...layout.staves.flatMap(({ column, stave }) =>
+      column.map(
+        ({ x, y, text, kind }): Shape =>
+          words(x, y, text, {
+            ...(kind === 'name' ? { size: 13, weight: 600 } : { ink: 'slate' }),
+            role: { stave: stave.key },
+          }),
+      ),
+    ),
+    ...layout.staves.flatMap((stave) => limitValueShapes(stave, layout)),
+    ...footShapes(layout),
+    ...empty,
+  ]
+}
+
+/** The whole chart as one picture: for files, paper, and pages without scripts. */
+export const drawStaffChart = (layout: StaffLayout): Drawing => ({
+  width: layout.width,
+  height: layout.height,
+  label: `Staff chart of ${layout.chart.title}`,
+  description: describeStaffChart(layout.chart),
+  shapes: [...plotShapes(layout), ...marginShapes(layout)],
+})

@@ -1,0 +1,52 @@
+import type { LotWindow } from './staff-chart'
+
+/** Lots stand this far apart; where there are more than fit, closer, and below 12 px not every note is drawn. */
+export const LOT_STEP = 14.2
+export const LEAST_STEP = 12
+/** The first lot stands 1.1 steps from the left bar, and a full window leaves as much at its right. */
+const LEAD = 1.1
+
+/** The horizontal frame that all staves share. */
+export interface PlotFrame {
+  readonly x: number
+  readonly w: number
+  /** px per lot. */
+  readonly step: number
+  /** Lot indices (fractions) at the plot's left and right edge: the domain of the lot axis. */
+  readonly domain: readonly [number, number]
+  /** On a narrow page labels stand above their stave, not beside it. */
+  readonly compact: boolean
+  readonly xAt: (index: number) => number
+  readonly indexAt: (x: number) => number
+  /** Where the part that is still to be made begins, when the newest lot is in the window and there is room. */
+  readonly future?: number
+}
+
+const NARROW = 600
+
+/**
+ * Fits the lots of a window to a page `width` px wide. A window that ends at the newest lot keeps 14.2 px a lot
+ * and leaves the rest of the plot for lots still to be made; any other window fills the plot.
+ */
+export function plotFrame(width: number, window: LotWindow, lotCount: number): PlotFrame {
+  const compact = width < NARROW
+  const x = compact ? 2 : 138
+  const w = Math.max(60, width - x - (compact ? 50 : 62))
+  const count = window.to - window.from + 1
+  const fit = w / (Math.max(0, count) - 1 + 2 * LEAD)
+  const isNewest = window.to >= lotCount - 1
+  const step = Math.min(isNewest ? LOT_STEP : 40, count > 0 ? fit : LOT_STEP)
+  const left = window.from - LEAD
+  const xAt = (index: number): number => x + (index - left) * step
+  const end = xAt(window.to) + step / 2
+  return {
+    x,
+    w,
+    step,
+    compact,
+    domain: [left, left + w / step],
+    xAt,
+    indexAt: (at) => left + (at - x) / step,
+    future: isNewest && count > 0 && x + w - end > 4 * LOT_STEP ? end : undefined,
+  }
+}

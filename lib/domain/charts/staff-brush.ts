@@ -1,0 +1,128 @@
+import { clampWindow } from './build-staff-chart'
+import { lines, words } from './marks'
+import type { Shape } from './shape'
+import type { LotWindow, StaffChartInput } from './staff-chart'
+import { textWidth } from './text-width'
+
+/** The overview of all lots under a chart: 40 px high, labels beneath. */
+export interface StaffBrush {
+  readonly width: number
+  readonly height: number
+  readonly x: number
+  readonly w: number
+  readonly lotCount: number
+  readonly xAt: (index: number) => number
+  readonly indexAt: (x: number) => number
+  readonly shapes: readonly Shape[]
+}
+
+export const BRUSH_HEIGHT = 40
+const TOP = 4
+/** Fewer lots than these in a window are a list, not a chart. */
+export const LEAST_WINDOW = 8
+
+const middleOf = (values: readonly number[]): number => {
+  const sorted = values.toSorted((a, b) => a - b)
+  return sorted[Math.floor(sorted.length / 2)] ?? 0
+}
+
+/** Ticks of the first stave: all lots, between its own extremes; runs of equal marks in one path. */
+function overview(input: StaffChartInput, xAt: (index: number) => number): Shape[] {
+  const stave = input.staves[0]
+  if (!stave) return []
+  const values = stave.values.flatMap((value, index) =>
+    value === undefined || !Number.isFinite(value) ? [] : [{ value, index }],
+  )
+  const middle = stave.limitSets.at(-1)?.centre ?? middleOf(values.map(({ value }) => value))
+  const reach = Math.max(0, ...values.map(({ value }) => Math.abs(value - middle)))
+  const yAt = (value: number): number => TOP + 20 - (reach > 0 ? ((value - middle) / reach) * 15 : 0)
+  return [
+    lines(
+      [8, 14, 20, 26, 32].map((y) => [xAt(0) - 4, TOP + y, xAt(input.lots.length - 1) + 4, TOP + y] as const),
+      { stroke: 'staff', width: 0.5 },
+    ),
+    lines(
+      values.map(({ value, index }) => [xAt(index), yAt(value) - 1.6, xAt(index), yAt(value) + 1.6] as const),
+      { stroke: 'ink', width: 2.2 },
+    ),
+    ...(['answered', 'open'] as const).flatMap((state) => {
+      const bars = stave.signals
+        .filter((signal) => signal.state === state)
+        .map(
+          ({ members }) =>
+            [xAt(members[0] ?? 0) - 1, TOP + 2, xAt(members.at(-1) ?? 0) + 1, TOP + 2] as const,
+        )
+      return bars.length > 0
+        ? [lines(bars, { stroke: state === 'open' ? 'vermilion' : 'slate', width: 2 })]
+        : []
+    }),
+  ]
+}
+
+/** Names of months (or days) where they change, as many as stand clear of each other. */
+function monthLabels(input: StaffChartInput, xAt: (index: number) => number, right: number): Shape[] {
+  const shapes: Shape[] = []
+  let free = Number.NEGATIVE_INFINITY
+  let before: string | undefined
+  input.lots.forEach(({ monthLabel, label }, index) => {
+    const text = monthLabel ?? label
+    const x = xAt(index)
+    const w = textWidth(text, 11)
+    if (text !== before && x >= free && x + w <= right) {
+      shapes.push(words(x, TOP + BRUSH_HEIGHT + 17, text, { ink: 'slate' }))
+      free = x + w + 14
+    }
+    before = text
+  })
+  return shapes
+}
+
+/** Lays out the overview; the window and its handles are drawn over it. */
+export function staffBrush(
+  input: StaffChartInput,
+  frame: { readonly x: number; readonly w: number; readonly compact: boolean },
+  width: number,
+): StaffBrush {
+  const lotCount = input.lots.length
+  const inner = frame.w - 12
+  const perLot = lotCount > 1 ? inner / (lotCount - 1) : 0
+  const xAt = (index: number): number => frame.x + 6 + index * perLot
+  const gaps = input.staves[0]?.values.filter((value) => value === undefined).length ?? 0
+  return {
+    width,
+    height: TOP + BRUSH_HEIGHT + 24,
+    x: frame.x,
+    w: frame.w,
+    lotCount,
+    xAt,
+    indexAt: (x) => (perLot === 0 ? 0 : (x - frame.x - 6) / perLot),
+    shapes: [
+      ...(frame.compact
+        ? []
+        : [
+            words(0, TOP + 16, 'All lots', { weight: 600 }),
+            words(0, TOP + 31, `${lotCount} lots${gaps > 0 ? `, ${gaps} without a value` : ''}`, {
+              ink: 'slate',
+            }),
+          ]),
+      ...overview(input, xAt),
+      ...monthLabels(input, xAt, frame.x + frame.w),
+    ],
+  }
+}
+
+/** A window moved as a whole; it keeps its width at the ends. */
+export function moveWindow(window: LotWindow, by: number, lotCount: number): LotWindow {
+  const held = clampWindow(window, lotCount)
+  const step = Math.min(lotCount - 1 - held.to, Math.max(-held.from, Math.round(by)))
+  return { from: held.from + step, to: held.to + step }
+}
+
+/** A window with one end moved; the ends stay at least eight lots apart. */
+export function resizeWindow(window: LotWindow, end: 'from' | 'to', to: number, lotCount: number): LotWindow {
+  const held = clampWindow(window, lotCount)
+  const least = Math.min(LEAST_WINDOW, lotCount) - 1
+  return end === 'from'
+    ? clampWindow({ from: Math.min(Math.max(0, to), held.to - least), to: held.to }, lotCount)
+    : clampWindow({ from: held.from, to: Math.max(Math.min(lotCount - 1, to), held.from + least) }, lotCount)
+}
