@@ -8,7 +8,7 @@ import { engineOf } from './guarded-client'
 import { frozenLimitsOf, type LimitSetRow, listLimitSets } from './limit-sets'
 import { listProductSignals, storedSignalOf } from './signals'
 
-const isCharacteristic = (text: string): text is CharacteristicId =>
+export const isCharacteristic = (text: string): text is CharacteristicId =>
   (characteristicIds as readonly string[]).includes(text)
 
 export const statisticOf = (text: string): ChartedStatistic =>

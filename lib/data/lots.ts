@@ -164,3 +164,10 @@ export const listLotRows = async (
 
 export const countLotRows = (tx: Tx, filter: LotFilter): Promise<number> =>
   tx.lot.count({ where: whereOf(filter) })
+
+/** Codes by id. */
+export const listLotCodes = async (tx: Tx, ids: readonly number[]): Promise<ReadonlyMap<number, string>> => {
+  if (ids.length === 0) return new Map()
+  const rows = await tx.lot.findMany({ where: { id: { in: [...ids] } }, select: { id: true, code: true } })
+  return new Map(rows.map((row) => [row.id, row.code]))
+}

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { SpecimenSheet } from '@/lib/domain/metrology/sheet'
+import type { SheetPart } from '@/lib/domain/record/reading'
 import { degreesCelsius, hertz, kilograms, metres, newtons, pascals } from '@/lib/domain/units/quantity'
 import { codeText, paragraphs, plainText } from './plain-text'
 import { sheetBounds } from './sheet-bounds'
@@ -71,6 +72,7 @@ export const sheetPartSchema = z
     if (twice !== undefined)
       context.addIssue({ code: 'custom', path: ['load'], message: `Weight ${twice} can hang only once.` })
   })
+  .transform((part): SheetPart => part)
 
 /** A whole sheet, as the bench hands it in. */
 export const sheetSchema = sheetPartSchema.transform(
