@@ -100,18 +100,17 @@ export const uniqueViolation = (
 export const isUniqueViolation = (error: unknown, field: string): boolean =>
   uniqueViolation(error)?.fields.includes(field) ?? false
 
-/** Words that a guard in `prisma/guards` begins its refusal with. */
-const guardMark = 'Ledgerline: '
+/** A guard in `prisma/guards` begins its refusal with these words; the client may put it in backticks. */
+const refusalPattern = /Ledgerline: ([^`\n]+)/
 
 /** What a guard of the database said, or undefined. */
 export const guardRefusal = (error: unknown): string | undefined => {
   for (const message of messagesOf(error)) {
-    const start = message.indexOf(guardMark)
-    if (start >= 0)
-      return message
-        .slice(start + guardMark.length)
-        .split('\n')[0]
-        ?.trim()
+    const refusal = refusalPattern.exec(message)?.[1]
+    if (refusal !== undefined) return refusal.trim()
+    // PostgreSQL's own words for a broken check; the constraint is called after its table.
+    const table = /relation "(\w+)" violates check constraint/.exec(message)?.[1]
+    if (table !== undefined) return `A value in ${table} is not one that it may have.`
   }
   return undefined
 }
