@@ -9,7 +9,6 @@ import { PageHead } from '@/app/_ui/shell/PageHead'
 import { may } from '@/lib/access/permit'
 import { getToday, type TodayFacts } from '@/lib/services/get-today'
 import { getWorks } from '@/lib/services/get-works'
-import { signalTitle, signalWords } from './signal-words'
 import './today.css'
 
 export const metadata: Metadata = { title: 'Today' }
@@ -37,9 +36,9 @@ function itemsOf(today: TodayFacts, at: number, timeZone: string) {
     (signal): Item => ({
       key: `signal-${signal.id}`,
       mark: signal.rule === 'nine-on-one-side' ? 'run' : 'beyond',
-      title: `${signal.productName}: ${signalTitle(signal)}`,
-      text: signalWords(signal),
-      stake: `${signal.lots} ${signal.lots === 1 ? 'lot' : 'lots'}, last ${signal.lotCode}`,
+      title: `${signal.productName}: ${signal.chartName.toLowerCase()}`,
+      text: `${signal.sentence} It rejects no lot by itself, and has to be answered before release.`,
+      stake: `${signal.memberCodes.length} ${signal.memberCodes.length === 1 ? 'lot' : 'lots'}, ${signal.memberCodes.at(-1)} the last`,
       since: days(signal.raisedAt, at),
       href: `/drift?product=${encodeURIComponent(signal.productCode)}#signal-${signal.id}`,
       deed: 'Answer',

@@ -3,10 +3,9 @@ import { may, permit } from '@/lib/access/permit'
 import { database } from '@/lib/data/database'
 import { gauges } from '@/lib/data/gauges'
 import { countLotRows, type LotRow, listLotRows } from '@/lib/data/lots'
-import { listOpenSignals, type SignalRow } from '@/lib/data/signals'
-import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
-import { characteristicIds } from '@/lib/domain/metrology/characteristics'
 import type { LotState } from '@/lib/domain/record/lot-state'
+import { listSignals } from './list-signals'
+import type { SignalView } from './signal-views'
 
 export interface WaitingLot {
   readonly code: string
@@ -19,23 +18,8 @@ export interface WaitingLot {
   readonly signals: number
 }
 
-export interface WaitingSignal {
-  readonly id: number
-  readonly lotCode: string
-  readonly productCode: string
-  readonly productName: string
-  readonly characteristic: CharacteristicId
-  readonly statistic: string
-  readonly rule: string
-  readonly side: 'above' | 'below'
-  readonly lots: number
-  /** Mean departure from the centre, SI. */
-  readonly departure: number
-  readonly raisedAt: number
-}
-
 export interface TodayFacts {
-  readonly signals: readonly WaitingSignal[]
+  readonly signals: readonly SignalView[]
   readonly toDecide: { readonly lots: readonly WaitingLot[]; readonly count: number }
   readonly held: { readonly lots: readonly WaitingLot[]; readonly count: number }
   readonly toMeasure: { readonly lots: readonly WaitingLot[]; readonly count: number }
@@ -51,28 +35,6 @@ export interface TodayFacts {
 const SHOWN = 12
 const DUE_WITHIN = 30 * 24 * 3600_000
 
-const isCharacteristic = (id: string): id is CharacteristicId =>
-  (characteristicIds as readonly string[]).includes(id)
-
-const signalOf = (row: SignalRow): readonly WaitingSignal[] =>
-  isCharacteristic(row.characteristic)
-    ? [
-        {
-          id: row.id,
-          lotCode: row.lotCode,
-          productCode: row.productCode,
-          productName: row.productName,
-          characteristic: row.characteristic,
-          statistic: row.statistic,
-          rule: row.rule,
-          side: row.side,
-          lots: row.members.length,
-          departure: row.departure,
-          raisedAt: row.raisedAt,
-        },
-      ]
-    : []
-
 /** What waits, for the desks that measure and decide; sales sees how many lots are released. */
 export async function getToday(actor: Actor | undefined, at: number = Date.now()): Promise<TodayFacts> {
   permit(actor, 'settings.read')
@@ -81,8 +43,8 @@ export async function getToday(actor: Actor | undefined, at: number = Date.now()
   const none = { lots: [], count: 0 }
   if (!may(actor, 'lots.read'))
     return { signals: [], toDecide: none, held: none, toMeasure: none, equipmentDue: [], released }
-  const open = await listOpenSignals(read)
-  const signalsOf = (lotId: number): number => open.filter((one) => one.members.includes(lotId)).length
+  const open = await listSignals(actor)
+  const signalsOf = (lotId: number): number => open.filter((one) => one.memberIds.includes(lotId)).length
   const waitingOf = (row: LotRow & { readonly specimenCount: number }): WaitingLot => ({
     code: row.code,
     productName: row.product.name,
@@ -103,7 +65,7 @@ export async function getToday(actor: Actor | undefined, at: number = Date.now()
     )
     .sort((a, b) => (a.calibrationDueAt ?? 0) - (b.calibrationDueAt ?? 0))
   return {
-    signals: open.flatMap(signalOf),
+    signals: open,
     toDecide: await inState('to-decide'),
     held: await inState('held'),
     toMeasure: await inState('measuring'),
