@@ -4,7 +4,11 @@
  */
 import { LedgerlineError, problem } from '@/lib/domain/errors'
 
+/** An error of the client, of an adapter (`kind`, `originalCode`) or of a driver. */
 interface Chain {
+  readonly kind?: unknown
+  readonly originalCode?: unknown
+  readonly originalMessage?: unknown
   readonly code?: unknown
   readonly message?: unknown
   readonly cause?: unknown
@@ -26,16 +30,12 @@ const links = (error: unknown): readonly Chain[] => {
 
 const codesOf = (error: unknown): readonly string[] =>
   links(error).flatMap((link) =>
-    [link.code, (link as { originalCode?: unknown }).originalCode].filter(
-      (code): code is string => typeof code === 'string',
-    ),
+    [link.code, link.originalCode, link.kind].filter((code): code is string => typeof code === 'string'),
   )
 
 const messagesOf = (error: unknown): readonly string[] =>
   links(error).flatMap((link) =>
-    [link.message, (link as { originalMessage?: unknown }).originalMessage].filter(
-      (message): message is string => typeof message === 'string',
-    ),
+    [link.message, link.originalMessage].filter((message): message is string => typeof message === 'string'),
   )
 
 /** Another connection holds the file (SQLite). The transaction was not stored. */
@@ -58,12 +58,22 @@ const isUnreadable = (error: unknown): boolean =>
     ['SQLITE_CORRUPT', 'SQLITE_NOTADB', 'SQLITE_IOERR', 'SQLITE_CANTOPEN', 'SQLITE_READONLY'].some((start) =>
       code.startsWith(start),
     ),
-  )
+  ) || messagesOf(error).some((message) => message.startsWith('Cannot open database'))
 
-const isUnreachable = (error: unknown): boolean =>
-  codesOf(error).some((code) =>
-    ['P1001', 'P1002', 'P1017', 'ECONNREFUSED', 'ENOTFOUND', '57P01', '57P03'].includes(code),
-  )
+const unreachableCodes = new Set([
+  'P1001',
+  'P1002',
+  'P1017',
+  'DatabaseNotReachable',
+  'ConnectionClosed',
+  'ECONNREFUSED',
+  'ENOTFOUND',
+  // The server is being stopped, or not started yet.
+  '57P01',
+  '57P03',
+])
+
+const isUnreachable = (error: unknown): boolean => codesOf(error).some((code) => unreachableCodes.has(code))
 
 /**
  * The table and fields of a broken unique constraint, whichever engine reported it; undefined for any other
