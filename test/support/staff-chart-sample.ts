@@ -25,14 +25,22 @@ export interface SampleOptions {
   readonly lots?: number
   readonly seed?: number
   readonly window?: { readonly from: number; readonly to: number }
+  /** Every lot has the same values. */
+  readonly equal?: boolean
 }
 
 /**
  * Invented lots of one wire: a die that wears from lot 34 on until it is changed, a change of limit sets, four
  * lots left out of the baseline, one light load answered. Signals are those that the values really show.
  */
-export function sampleChart({ lots: count = 60, seed = 7, window }: SampleOptions = {}): StaffChartInput {
-  const next = seeded(seed)
+export function sampleChart({
+  lots: count = 60,
+  seed = 7,
+  window,
+  equal = false,
+}: SampleOptions = {}): StaffChartInput {
+  const random = seeded(seed)
+  const next = equal ? () => 0.5 : random
   const lots = Array.from({ length: count }, (_, index) => {
     const madeAt = START + Math.floor(index * 1.9) * DAY + Math.floor(next() * 6) * 3_600_000
     return {
@@ -43,13 +51,15 @@ export function sampleChart({ lots: count = 60, seed = 7, window }: SampleOption
       monthLabel: `${months[new Date(madeAt).getUTCMonth()]} 2026`,
     }
   })
-  const wear = (index: number): number => (index < 34 ? 0 : Math.min(1.6, 0.062 * (index - 34)))
+  const wear = (index: number): number => (equal || index < 34 ? 0 : Math.min(1.6, 0.062 * (index - 34)))
   const diameter = lots.map((_, index) =>
     index < 4 ? 254.9 + 0.4 * normal(next) : 253.92 + wear(index) + 0.33 * normal(next),
   )
-  const density = lots.map((_, index) => 7849 + (index > 17 && index < 28 ? -11 : 0) + 9 * normal(next))
+  const density = lots.map(
+    (_, index) => 7849 + (!equal && index > 17 && index < 28 ? -11 : 0) + 9 * normal(next),
+  )
   const mass = diameter.map((d, index) => ((density[index] ?? 0) * Math.PI * (d / 1000) ** 2) / 4)
-  const closure = lots.map((_, index) => (index === 22 ? 0.18 : 0.042 * normal(next)))
+  const closure = lots.map((_, index) => (!equal && index === 22 ? 0.18 : 0.042 * normal(next)))
   const spread = lots.map(() => Math.abs(0.21 + 0.075 * normal(next)))
   const leftOut = [0, 1, 2, 3].filter((index) => index < count)
   const sets = (centre: number, sigma: number, oneSided = false) => {

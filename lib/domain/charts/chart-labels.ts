@@ -3,7 +3,7 @@ import type { StaffLayout, StaveLayout } from './layout-staff-chart'
 import { words } from './marks'
 import { type Box, labelBox, placeLabels, type Spot, type Wish } from './place-labels'
 import { valueText } from './readout'
-import type { Role, Shape } from './shape'
+import type { Role, TextShape } from './shape'
 import { slurPoint } from './slur'
 import type { PlacedNote, PlacedSlur } from './stave-layout'
 
@@ -97,7 +97,7 @@ function runWish({ slur, curve, top, bottom }: PlacedSlur, stave: StaveLayout): 
 
 /** A tolerance's name at the left end of its line, or after the first bar line that leaves it room. */
 function toleranceWishes(stave: StaveLayout, { frame, bars }: StaffLayout): Wish<Label>[] {
-  const starts = [frame.x, ...bars.placed.map(({ x }) => x + 4)]
+  const starts = [frame.x, frame.x + 4, ...bars.placed.map(({ x }) => x + 4)]
   return stave.tolerances.map((line) => {
     const [out, inwards] = line.side === 'above' ? [-5, 12] : [12, -5]
     return {
@@ -149,7 +149,7 @@ function noteWishes(stave: StaveLayout, layout: StaffLayout): Wish<Label>[] {
 }
 
 /** Names of tolerances, values of notes beyond their limits, words of runs: where they touch nothing. */
-export function labelShapes(layout: StaffLayout): Shape[] {
+export function labelShapes(layout: StaffLayout): TextShape[] {
   const { staves, frame, plot, bars } = layout
   const drawnLines = staves.flatMap(({ tolerances, y }) =>
     tolerances.map((line): Box => ({ x: frame.x, y: y + line.y - 1, w: frame.w, h: 2 })),
@@ -187,7 +187,7 @@ export function labelShapes(layout: StaffLayout): Shape[] {
         ...slurs.flatMap((slur) => slurBoxes(slur, y)),
       ]),
     ],
-    bars: bars.placed.flatMap(({ xs }) => xs.map((x) => ({ x, y1: bars.y1, y2: bars.y2 }))),
+    bars: [frame.x, ...bars.placed.flatMap(({ xs }) => xs)].map((x) => ({ x, y1: bars.y1, y2: bars.y2 })),
     within: { x: frame.x, y: plot.y, w: frame.w, h: plot.h },
   })
   return placed.map(({ of, text, spot }) =>
@@ -195,8 +195,9 @@ export function labelShapes(layout: StaffLayout): Shape[] {
       anchor: spot.anchor,
       ink: of.ink,
       role: of.role,
-      halo: of.ink !== 'slate' || frame.future === undefined || spot.x < frame.future,
-      ...(of.italic ? { italic: true } : { weight: of.role.mark === 'value-label' ? 600 : 400 }),
+      ...(of.italic
+        ? { italic: true, halo: frame.future === undefined || spot.x < frame.future }
+        : { weight: of.role.mark === 'value-label' ? 600 : 400 }),
     }),
   )
 }

@@ -1,7 +1,8 @@
 import type { StaffLayout, StaveLayout } from './layout-staff-chart'
 import { lines, noteHead, openHead, polyline } from './marks'
+import { placeShape } from './place-shape'
 import { sigmasText, valueText } from './readout'
-import type { Paint, Role, Segment, Shape } from './shape'
+import type { Paint, Role, Shape } from './shape'
 import { slurOutline } from './slur'
 import type { PlacedNote, PlacedSlur } from './stave-layout'
 
@@ -61,28 +62,13 @@ export function noteShapes({ stave, notes, y }: StaveLayout, { chart }: StaffLay
 /** Slurs: vermilion while open, slate when answered, an empty broken outline when they no longer hold. */
 export function slurShapes({ stave, slurs, y }: StaveLayout): Shape[] {
   return slurs.map(({ slur, curve }: PlacedSlur): Shape => {
-    const outline = slurOutline(curve).map((segment) => shifted(segment, y))
     const ink = slur.state === 'open' ? 'vermilion' : 'slate'
     const paint: Paint =
       slur.state === 'no-longer-holds'
         ? { stroke: ink, width: 0.9, dash: [3, 3] }
         : { fill: ink, stroke: ink, width: 0.7, round: true }
     const role: Role = { mark: 'slur', stave: stave.key, signal: slur.signal, state: slur.state }
-    return {
-      kind: 'group',
-      title: slur.sentence,
-      shapes: [{ kind: 'path', segments: outline, ...paint, role }],
-    }
+    const outline: Shape = { kind: 'path', segments: slurOutline(curve), ...paint, role }
+    return { kind: 'group', title: slur.sentence, shapes: [placeShape(outline, (x, down) => [x, y + down])] }
   })
-}
-
-function shifted(segment: Segment, y: number): Segment {
-  switch (segment[0]) {
-    case 'C':
-      return ['C', segment[1], segment[2] + y, segment[3], segment[4] + y, segment[5], segment[6] + y]
-    case 'Z':
-      return segment
-    default:
-      return [segment[0], segment[1], segment[2] + y]
-  }
 }

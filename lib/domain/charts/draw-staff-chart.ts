@@ -14,20 +14,32 @@ import type { StaffLayout } from './layout-staff-chart'
 import { words } from './marks'
 import type { Drawing, Shape } from './shape'
 
-/** What lies in the plot, bottom first; positions follow the axes. */
-export function plotShapes(layout: StaffLayout): readonly Shape[] {
-  const each = <T>(of: (stave: StaffLayout['staves'][number], layout: StaffLayout) => readonly T[]): T[] =>
-    layout.staves.flatMap((stave) => of(stave, layout))
+/** Shapes that follow the axes of one stave; without a key, those of the first. */
+export interface PlotLayer {
+  readonly stave?: string
+  readonly shapes: readonly Shape[]
+}
+
+/** What lies in the plot, bottom first. */
+export function plotLayers(layout: StaffLayout): readonly PlotLayer[] {
+  const { staves } = layout
+  const labels = labelShapes(layout)
   return [
-    ...futureShapes(layout),
-    ...each(staffShapes),
-    ...each(unlimitedShapes),
-    ...each(toleranceShapes),
-    ...barShapes(layout),
-    ...each(slurShapes),
-    ...each(ledgerShapes),
-    ...each(noteShapes),
-    ...labelShapes(layout),
+    { shapes: futureShapes(layout) },
+    ...staves.map((stave) => ({
+      stave: stave.stave.key,
+      shapes: [...staffShapes(stave), ...unlimitedShapes(stave, layout), ...toleranceShapes(stave, layout)],
+    })),
+    { shapes: barShapes(layout) },
+    ...staves.map((stave) => ({
+      stave: stave.stave.key,
+      shapes: [
+        ...slurShapes(stave),
+        ...ledgerShapes(stave),
+        ...noteShapes(stave, layout),
+        ...labels.filter(({ role }) => role?.stave === stave.stave.key),
+      ],
+    })),
   ]
 }
 
@@ -59,5 +71,5 @@ export const drawStaffChart = (layout: StaffLayout): Drawing => ({
   height: layout.height,
   label: `Staff chart of ${layout.chart.title}`,
   description: describeStaffChart(layout.chart),
-  shapes: [...plotShapes(layout), ...marginShapes(layout)],
+  shapes: [...plotLayers(layout).flatMap(({ shapes }) => shapes), ...marginShapes(layout)],
 })

@@ -101,9 +101,14 @@ export function staffBrush(
         ? []
         : [
             words(0, TOP + 16, 'All lots', { weight: 600 }),
-            words(0, TOP + 31, `${lotCount} lots${gaps > 0 ? `, ${gaps} without a value` : ''}`, {
-              ink: 'slate',
-            }),
+            words(
+              0,
+              TOP + 31,
+              `${lotCount} lots${gaps === 0 ? '' : gaps === 1 ? ', 1 gap' : `, ${gaps} gaps`}`,
+              {
+                ink: 'slate',
+              },
+            ),
           ]),
       ...overview(input, xAt),
       ...monthLabels(input, xAt, frame.x + frame.w),
