@@ -5,7 +5,8 @@ import {
   doubtMass,
   type EntryDoubt,
 } from '@/lib/domain/metrology/entry-doubts'
-import { measurementModel, modelFacts } from '@/lib/domain/metrology/measurement-model'
+import { measurementModel } from '@/lib/domain/metrology/measurement-model'
+import { modelFacts } from '@/lib/domain/metrology/model-facts'
 import type { SpecimenSheet, TypedValue } from '@/lib/domain/metrology/sheet'
 import { understandEntry } from '@/lib/domain/metrology/understand-entry'
 import type { Result } from '@/lib/domain/result'

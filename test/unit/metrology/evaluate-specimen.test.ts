@@ -4,7 +4,8 @@ import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
 import { closureVerdict } from '@/lib/domain/metrology/closure'
 import { evaluateSpecimen } from '@/lib/domain/metrology/evaluate-specimen'
 import { evaluationInputs } from '@/lib/domain/metrology/evaluation-inputs'
-import { measurementModel, modelFacts } from '@/lib/domain/metrology/measurement-model'
+import { measurementModel } from '@/lib/domain/metrology/measurement-model'
+import { modelFacts } from '@/lib/domain/metrology/model-facts'
 import type { SpecimenSheet } from '@/lib/domain/metrology/sheet'
 import { airDensity } from '@/lib/domain/strings/air-density'
 import { airViscosity } from '@/lib/domain/strings/air-viscosity'
@@ -17,19 +18,32 @@ import {
   hertz,
   kilograms,
   kilogramsPerCubicMetre,
+  kilogramsPerMetre,
   metres,
   metresPerSecondSquared,
   newtons,
   pascals,
+  perKelvin,
 } from '@/lib/domain/units/quantity'
 import { seededNormal, seededUniform } from '@/test/support/seeded-random'
-import { steelSheet, typedHertz } from '@/test/support/sheets'
+import { steelSheet, typedHertz, typedMass } from '@/test/support/sheets'
 import { steelContext } from '@/test/support/steel-context'
 
-/** What a perfect bench would read on a true wire of diameter d and density ρ: the chain backwards. */
-function perfectSheet(diameter: number, density: number, end: 'pinned' | 'knife' | 'clamped'): SpecimenSheet {
+/**
+ * What a perfect bench would read at t °C on a true wire of diameter d and density ρ at 20 °C, with gauge, rule
+ * and rig of steel: the chain backwards.
+ */
+function perfectSheet(
+  diameter: number,
+  density: number,
+  end: 'pinned' | 'knife' | 'clamped',
+  celsius = 20,
+  expansion = 11.5e-6,
+): SpecimenSheet {
   const context = steelContext()
-  const air = { temperature: degreesCelsius(20), pressure: pascals(101325), humidity: 0.5 }
+  const steel = 1 + 11.5e-6 * (celsius - 20)
+  const grown = 1 + expansion * (celsius - 20)
+  const air = { temperature: degreesCelsius(celsius), pressure: pascals(101325), humidity: 0.5 }
   const airRho = airDensity(air)
   const gravity = metresPerSecondSquared(context.gravity.value)
   const modulus = context.material.youngsModulus.value
@@ -42,17 +56,21 @@ function perfectSheet(diameter: number, density: number, end: 'pinned' | 'knife'
   const frequency = soundedFundamental(
     {
       force,
-      span: metres(0.648),
+      span: metres(0.648 * steel),
       endCondition: end,
       axialStiffness: plainWireAxialStiffness(modulus, d),
       bendingStiffness: plainWireBendingStiffness(modulus, d),
       outerDiameter: d,
       air: { density: airRho, viscosity: airViscosity(air.temperature, airRho) },
     },
-    mass,
+    kilogramsPerMetre(mass / grown),
   )
-  const cut = (mass * 0.5 * (1 - airRho / 7850)) / (1 - airRho / 8000)
-  const value = { typed: '', unit: 'mm', si: d }
+  const cut = ((mass / grown) * 0.5 * steel * (1 - airRho / 7850)) / (1 - airRho / 8000)
+  const value = {
+    typed: '',
+    unit: 'mm',
+    si: metres(diameter / (1 - (expansion - 11.5e-6) * (celsius - 20))),
+  }
   return steelSheet({
     diameters: [1, 2, 3].flatMap((position) => [
       { position, direction: 'a' as const, value },
@@ -62,6 +80,7 @@ function perfectSheet(diameter: number, density: number, end: 'pinned' | 'knife'
     cutMass: { typed: '', unit: 'mg', si: kilograms(cut) },
     span: { typed: '648', unit: 'mm', si: metres(0.648) },
     frequencies: [{ typed: '', unit: 'Hz', si: hertz(frequency) }],
+    temperature: { typed: '', unit: '°C', si: degreesCelsius(celsius) },
   })
 }
 
@@ -72,10 +91,23 @@ describe('evaluateSpecimen(sheet, context)', () => {
         fc.double({ min: 230e-6, max: 340e-6, noNaN: true }),
         fc.double({ min: 7800, max: 7900, noNaN: true }),
         fc.constantFrom('pinned', 'knife', 'clamped'),
-        (diameter, density, end) => {
-          const rig = steelContext().rig
-          const context = steelContext({ rig: rig && { ...rig, endCondition: end } })
-          const { results } = evaluateSpecimen(perfectSheet(diameter, density, end), context)
+        fc.double({ min: 10, max: 32, noNaN: true }),
+        fc.constantFrom(11.5e-6, 18e-6),
+        (diameter, density, end, celsius, expansion) => {
+          const { material, rig } = steelContext()
+          const context = steelContext({
+            rig: rig && { ...rig, endCondition: end },
+            material: {
+              ...material,
+              thermalExpansion: {
+                value: perKelvin(expansion),
+                low: perKelvin(expansion),
+                high: perKelvin(expansion),
+              },
+            },
+          })
+          const sheet = perfectSheet(diameter, density, end, celsius, expansion)
+          const { results } = evaluateSpecimen(sheet, context)
           const mass = (density * Math.PI * diameter * diameter) / 4
           expect(Math.abs((results.massPerMetreSounded?.value ?? 0) / mass - 1)).toBeLessThan(1e-12)
           expect(Math.abs((results.massPerMetreWeighed?.value ?? 0) / mass - 1)).toBeLessThan(1e-12)
@@ -137,6 +169,79 @@ describe('evaluateSpecimen(sheet, context)', () => {
     expect(ratio - 1).toBeCloseTo(marked.steps.strain ?? 0, 12)
     const without = evaluateSpecimen(steelSheet({ weighedState: 'marked', load: undefined }), steelContext())
     expect(without.missing).toContain('The load under which it was marked is missing.')
+  })
+
+  it('takes a piece marked at both edges to be as long as the span, with the span’s uncertainty in both routes', () => {
+    const marked = steelSheet({ weighedState: 'marked', cutLength: undefined, cutMass: typedMass('256.0') })
+    const { budgets, results, steps } = evaluateSpecimen(marked, steelContext())
+    const airRho = steps.airDensity ?? 0
+    const buoyancy = (1 - airRho / 8000) / (1 - airRho / 7850)
+    const expected = ((256e-6 * buoyancy) / 0.648) * (1 + (steps.strain ?? 0))
+    expect((results.massPerMetreWeighed?.value ?? 0) / expected - 1).toBeNear(0, { absolute: 1e-12 })
+    const span = (id: CharacteristicId) =>
+      budgets[id]?.find((line) => line.input === 'Span of rig RIG-2')?.contribution ?? 0
+    const relative = 6e-5 / 0.648
+    expect(span('massPerMetreWeighed')).toBeNear(relative * expected, { relative: 1e-4 })
+    // −1 by weighing, −2 by sounding: one of them is left in the closure, and the ends’ 0.2 % goes with 1/L.
+    expect(span('closure')).toBeNear(relative, { relative: 5e-3 })
+  })
+
+  it('refuses in words what no string can sound, and keeps the other results', () => {
+    const high = evaluateSpecimen(steelSheet({ frequencies: [typedHertz('40000')] }), steelContext())
+    expect(high.missing.at(-1)).toMatch(/^The air alone would weigh/)
+    expect(high.results.massPerMetreWeighed).toBeDefined()
+    const light = { typed: '0.01', unit: 'N', si: newtons(0.01) }
+    const bar = evaluateSpecimen(steelSheet({ load: { kind: 'force', value: light } }), steelContext())
+    expect(bar.missing.at(-1)).toMatch(/^So thick a string/)
+    expect(bar.results.massPerMetreSounded).toBeUndefined()
+  })
+
+  it('never gives NaN and never throws, whatever finite readings are typed', () => {
+    const within = (min: number, max: number) =>
+      fc.double({ min: Math.log(min), max: Math.log(max), noNaN: true }).map((x) => Math.exp(x))
+    const maybe = <T>(one: fc.Arbitrary<T>) => fc.option(one, { nil: undefined })
+    fc.assert(
+      fc.property(
+        fc.record({
+          d: fc.array(within(1e-5, 0.02), { maxLength: 6 }),
+          length: maybe(within(1e-3, 20)),
+          mass: maybe(within(1e-7, 2)),
+          force: maybe(within(0.01, 5000)),
+          span: maybe(within(0.01, 10)),
+          plucks: fc.array(within(5, 20_000), { maxLength: 4 }),
+          celsius: maybe(fc.double({ min: -20, max: 60, noNaN: true })),
+          marked: fc.boolean(),
+        }),
+        ({ celsius, d, force, length, marked, mass, plucks, span }) => {
+          const value = <Q extends number>(si: Q, unit: string) => ({ typed: '', unit, si })
+          const sheet: SpecimenSheet = {
+            diameters: d.map((si, index) => ({
+              position: 1 + Math.floor(index / 2),
+              direction: index % 2 === 0 ? 'a' : 'b',
+              value: value(metres(si), 'm'),
+            })),
+            weighedState: marked ? 'marked' : 'slack',
+            ...(length ? { cutLength: value(metres(length), 'm') } : {}),
+            ...(mass ? { cutMass: value(kilograms(mass), 'kg') } : {}),
+            ...(force ? { load: { kind: 'force', value: value(newtons(force), 'N') } } : {}),
+            ...(span ? { span: value(metres(span), 'm') } : {}),
+            frequencies: plucks.map((si) => value(hertz(si), 'Hz')),
+            ...(celsius === undefined ? {} : { temperature: value(degreesCelsius(celsius), '°C') }),
+            keptDoubts: [],
+          }
+          const evaluation = evaluateSpecimen(sheet, steelContext())
+          const numbers = [
+            ...Object.values(evaluation.results).flatMap(({ value: v, u, uCommon }) => [v, u, uCommon]),
+            ...Object.values(evaluation.budgets).flatMap((lines) => lines.map((line) => line.contribution)),
+            ...evaluation.corrections.flatMap((one) => [one.relative, one.amount, one.cents ?? 0]),
+            ...Object.values(evaluation.steps),
+          ]
+          expect(numbers.filter((x) => !Number.isFinite(x))).toEqual([])
+          expect(evaluation.missing.filter((text) => !/^[A-Z].*\.$/.test(text))).toEqual([])
+        },
+      ),
+      { numRuns: 300 },
+    )
   })
 
   it('takes off the known error of a micrometer', () => {
