@@ -87,3 +87,16 @@ export const markRevisions = async (tx: Tx, ids: readonly number[]): Promise<voi
       data: { evidenceChanged: true },
     })
 }
+
+/** Unmarked decisions in force on lots of a product made from a time on. */
+export const listDecidedFrom = async (tx: Tx, productId: number, madeFrom: number) =>
+  (
+    await tx.disposition.findMany({
+      where: {
+        current: true,
+        evidenceChanged: false,
+        lot: { productId, madeAt: { gte: new Date(madeFrom) } },
+      },
+      select: { id: true, lotId: true, evidence: true, lot: { select: { madeAt: true } } },
+    })
+  ).map(({ lot, ...row }) => ({ ...row, madeAt: lot.madeAt.getTime() }))

@@ -171,3 +171,12 @@ export const listLotCodes = async (tx: Tx, ids: readonly number[]): Promise<Read
   const rows = await tx.lot.findMany({ where: { id: { in: [...ids] } }, select: { id: true, code: true } })
   return new Map(rows.map((row) => [row.id, row.code]))
 }
+
+/** Marks lots whose decision rests on older evidence. */
+export const markLots = async (tx: Tx, ids: readonly number[]): Promise<void> => {
+  if (ids.length > 0)
+    await tx.lot.updateMany({
+      where: { id: { in: [...ids] } },
+      data: { evidenceChanged: true, version: { increment: 1 } },
+    })
+}

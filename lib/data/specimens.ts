@@ -67,12 +67,30 @@ export const evaluationSelect = {
   result: { omit: { evaluationId: true } },
 } as const
 
-/** All specimens of a lot by their numbers. */
+/** All specimens of a lot by their numbers. Throws when an evaluation in force has lost its results. */
 export async function loadSpecimens(
   tx: Tx,
   lotId: number,
   equipment: KnownEquipment,
 ): Promise<readonly StoredSpecimen[]> {
+  const rows = await loadReadings(tx, lotId, equipment)
+  const ids = rows.flatMap((row) => row.currentEvaluationId ?? [])
+  const evaluations =
+    ids.length === 0
+      ? []
+      : await tx.evaluation.findMany({ where: { id: { in: ids } }, select: evaluationSelect })
+  const current = new Map(evaluations.map((row) => [row.specimenId, storedEvaluation(row)]))
+  return rows.map(({ currentEvaluationId: _, ...row }) => ({ ...row, evaluation: current.get(row.id) }))
+}
+
+/** The specimens of a lot with their readings alone. */
+export async function loadReadings(
+  tx: Tx,
+  lotId: number,
+  equipment: KnownEquipment,
+): Promise<
+  readonly (Omit<StoredSpecimen, 'evaluation'> & { readonly currentEvaluationId: number | null })[]
+> {
   const rows = await tx.specimen.findMany({
     where: { lotId },
     orderBy: { number: 'asc' },
@@ -85,14 +103,8 @@ export async function loadSpecimens(
       readings: { select: readingSelect, orderBy: { id: 'asc' } },
     },
   })
-  const ids = rows.flatMap((row) => row.currentEvaluationId ?? [])
-  const evaluations =
-    ids.length === 0
-      ? []
-      : await tx.evaluation.findMany({ where: { id: { in: ids } }, select: evaluationSelect })
-  const current = new Map(evaluations.map((row) => [row.specimenId, storedEvaluation(row)]))
   const codes = codesOf(equipment)
-  return rows.map(({ createdAt, readings, currentEvaluationId: _, ...row }) => ({
+  return rows.map(({ createdAt, readings, ...row }) => ({
     ...row,
     createdAt: createdAt.getTime(),
     readings: readings.map(
@@ -127,7 +139,6 @@ export async function loadSpecimens(
         ...(supersedes === null ? {} : { supersedes: supersedes.clientId }),
       }),
     ),
-    evaluation: current.get(row.id),
   }))
 }
 
@@ -142,7 +153,7 @@ interface SelectedEvaluation {
   readonly result: ResultRow | null
 }
 
-export function storedEvaluation(row: SelectedEvaluation): StoredEvaluation {
+function storedEvaluation(row: SelectedEvaluation): StoredEvaluation {
   if (row.result === null) throw new Error(`evaluation ${row.id} has lost its results; recompute them`)
   return {
     id: row.id,
