@@ -18,37 +18,51 @@ const migrationLock = 4_107_559_011
 
 /** @throws LedgerlineError; nothing is changed then */
 export const migratePostgresql = async (url: string, set: MigrationSet): Promise<MigrationReport> => {
-  // One connection only: whatever the engine asks for comes to the one that holds the transaction.
-  const pool = new pg.Pool({ ...postgresqlConfig(url, 'script'), max: 1, idleTimeoutMillis: 0 })
-  pool.on('error', () => undefined)
+  const client = new pg.Client(postgresqlConfig(url, 'script'))
+  client.on('error', () => undefined)
   try {
-    await pool.query('begin')
-    await pool.query('select pg_advisory_xact_lock($1)', [migrationLock])
-    const applied = await withSchemaEngine(sharing(pool), async (engine) => {
-      const missing = await missingMigrations(engine, set)
+    await client.connect()
+    await client.query('begin')
+    await client.query('select pg_advisory_xact_lock($1)', [migrationLock])
+    const applied = await withSchemaEngine(sharing(client), async (engine) => {
+      // Asking for a history that is not there fails, and a failure would end the transaction.
+      const missing = (await hasHistory(client)) ? await missingMigrations(engine, set) : set.migrations
       return missing.length === 0 ? [] : await applyMissing(engine, set)
     })
-    await pool.query(set.guards)
-    await pool.query('commit')
+    await client.query(set.guards)
+    await client.query('commit')
     return { applied, copy: undefined }
   } catch (error) {
-    await pool.query('rollback').catch(() => undefined)
+    await client.query('rollback').catch(() => undefined)
     throw explain(error)
   } finally {
-    await pool.end()
+    await client.end().catch(() => undefined)
   }
 }
 
-/** The engine's connections, all on `pool`, which stays open when the engine is done. */
-const sharing = (pool: pg.Pool): SqlMigrationAwareDriverAdapterFactory => {
+const hasHistory = async (client: pg.Client): Promise<boolean> => {
+  const { rows } = await client.query<{ found: boolean }>(
+    `select to_regclass('_prisma_migrations') is not null as found`,
+  )
+  return rows[0]?.found ?? false
+}
+
+/**
+ * Whatever the engine asks for goes to the one connection that holds the transaction. (A pool, even of one,
+ * closes a connection on which a query failed, and goes on outside the transaction on another.)
+ */
+const sharing = (client: pg.Client): SqlMigrationAwareDriverAdapterFactory => {
+  const pool = new pg.Pool()
+  Object.defineProperty(pool, 'query', { value: client.query.bind(client) })
+  Object.defineProperty(pool, 'connect', {
+    value: () => Promise.reject(new Error('A migration is one transaction already.')),
+  })
   const factory = new PrismaPg(pool)
   return {
     provider: factory.provider,
     adapterName: factory.adapterName,
     connect: (): Promise<SqlDriverAdapter> => factory.connect(),
-    connectToShadowDb: () => {
-      throw new Error('No shadow database is used here.')
-    },
+    connectToShadowDb: () => Promise.reject(new Error('No shadow database is used here.')),
   }
 }
 

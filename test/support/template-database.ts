@@ -52,35 +52,47 @@ export interface TestDatabase {
   drop(): Promise<void>
 }
 
+/** A database of the engine's own kind with nothing in it, or (embedded engine) a place for one. */
+export const createEmptyDatabase = (): Promise<TestDatabase> =>
+  testEngine === 'sqlite' ? Promise.resolve(sqliteAt(temporaryFolder())) : createOnCluster('template0')
+
 /** A fresh copy of the template. Most tests want `useFreshDatabase`. */
-export const createTestDatabase = async (engine: Engine = testEngine): Promise<TestDatabase> => {
+export const createTestDatabase = async (): Promise<TestDatabase> => {
+  if (testEngine === 'postgresql')
+    return createOnCluster(new URL(inject('postgresqlTemplate')).pathname.slice(1))
+  const template = await sqliteTemplate()
   const folder = temporaryFolder()
-  const removeFolder = () => rmSync(folder, { recursive: true, force: true })
-  if (engine === 'sqlite') {
-    const path = join(folder, 'ledgerline.db')
-    copyFileSync(await sqliteTemplate(), path)
-    return { engine, folder, databaseUrl: `file:${path}`, drop: async () => removeFolder() }
-  }
-  const template = new URL(inject('postgresqlTemplate'))
-  const templateName = template.pathname.slice(1)
-  const name = `t_${randomUUID().replaceAll('-', '')}`
-  const own = new URL(template)
-  own.pathname = `/${name}`
-  const server = new URL(template)
+  copyFileSync(template, join(folder, 'ledgerline.db'))
+  return sqliteAt(folder)
+}
+
+const sqliteAt = (folder: string): TestDatabase => ({
+  engine: 'sqlite',
+  folder,
+  databaseUrl: `file:${join(folder, 'ledgerline.db')}`,
+  drop: async () => rmSync(folder, { recursive: true, force: true }),
+})
+
+const createOnCluster = async (template: string): Promise<TestDatabase> => {
+  const own = new URL(inject('postgresqlTemplate'))
+  const server = new URL(own)
   server.pathname = '/postgres'
+  const name = `t_${randomUUID().replaceAll('-', '')}`
+  own.pathname = `/${name}`
   // Making a copy needs the template for itself; test files that start together take turns.
   await onCluster(
     server.href,
     'select pg_advisory_lock(7731)',
-    `create database ${name} template ${templateName}`,
+    `create database ${name} template ${template}`,
   )
+  const folder = temporaryFolder()
   return {
-    engine,
+    engine: 'postgresql',
     folder,
     databaseUrl: own.href,
     drop: async () => {
       await onCluster(server.href, `drop database ${name} with (force)`)
-      removeFolder()
+      rmSync(folder, { recursive: true, force: true })
     },
   }
 }
