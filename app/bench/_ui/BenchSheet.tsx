@@ -39,7 +39,7 @@ export function BenchSheet({ view }: { readonly view: BenchView }) {
         {view.driftLine ? (
           <span>
             {view.driftLine}{' '}
-            <Link href={`/drift?product=${encodeURIComponent(view.lot.productName)}`}>See Drift</Link>
+            <Link href={`/drift?product=${encodeURIComponent(view.lot.productCode)}`}>See Drift</Link>
           </span>
         ) : null}
         <span className="kept">
@@ -112,7 +112,13 @@ export function BenchSheet({ view }: { readonly view: BenchView }) {
             {view.equipmentLines.map((line) => (
               <span key={line.text}>
                 {line.text}
-                {line.due ? <b className={line.overdue ? 'vermilion' : 'brass'}> {line.due}</b> : null}.{' '}
+                {line.due ? (
+                  <span className={line.overdue ? 'vermilion' : line.soon ? 'brass' : undefined}>
+                    {' '}
+                    {line.due}
+                  </span>
+                ) : null}
+                .{' '}
               </span>
             ))}
           </p>

@@ -4,9 +4,10 @@ import { Fragment, type KeyboardEvent, useEffect, useRef, useState } from 'react
 import { VerdictMark } from '@/app/_ui/charts/VerdictMark'
 import { benchFields, cellKey } from '@/lib/input/bench-cells'
 import { shownValue } from './bench-core'
-import type { ResultRow } from './bench-lot'
+import { type ResultRow, soFarOf } from './bench-lot'
 import type { BenchView } from './bench-view'
 import { QuestionPanel } from './QuestionPanel'
+import { SoFarStrip } from './SoFarStrip'
 import type { Bench, Delivery } from './use-bench'
 
 interface Props {
@@ -202,7 +203,9 @@ export function SheetTable({ view, bench, rows, planTexts }: Props) {
                       </td>
                     )
                   })}
-                  <td className="so-far" />
+                  <td className="so-far">
+                    <SoFarStrip soFar={soFarOf(view, state.values, field.id)} />
+                  </td>
                   <td className="plan">{planTexts[field.id] ?? ''}</td>
                 </tr>
                 {failing ? (

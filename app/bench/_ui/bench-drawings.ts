@@ -34,7 +34,7 @@ export function sectionOf(
     lower: fromSi(diameter.lower, unit),
     upper: fromSi(diameter.upper, unit),
     places: [...positions].map((position) => ({
-      label: `place ${position}`,
+      label: String(position),
       a: read(position, 'a'),
       b: read(position, 'b'),
     })),

@@ -107,7 +107,7 @@ function planText(view: BenchView, id: CharacteristicId, display: Display): stri
   const limits = limitsOf(view.context.specification, id)
   const show = (si: number, decimals = display.decimals): string =>
     formatQuantity(si, display.unit, { decimals, decimal: view.decimal })
-  if (!limits) return id === 'closure' ? 'normalised error at most 1' : ''
+  if (!limits) return id === 'closure' ? 'within U' : ''
   const { lower, upper } = limits
   if (lower === undefined) return upper === undefined ? '' : `at most ${show(upper)}`
   if (upper === undefined) return `at least ${show(lower)}`
@@ -164,9 +164,8 @@ export function liveLot(
     }
     const expandedSi = summary && COVERAGE_FACTOR * summary.uMean
     const shownU = expandedSi === undefined ? undefined : differenceFromSi(expandedSi, display.unit)
-    const decimals =
-      shownU === undefined ? display.decimals : (decimalsForUncertainty(shownU, 1) ?? display.decimals)
-    const lotDecimals = Math.max(0, Math.min(decimals, display.decimals))
+    const needed = shownU === undefined ? undefined : decimalsForUncertainty(shownU)
+    const lotDecimals = Math.max(0, Math.min(needed ?? display.decimals, display.decimals))
     return {
       id,
       label: display.label,
@@ -189,7 +188,10 @@ export function liveLot(
               decimal: view.decimal,
               sign: signed(id),
             }),
-            expanded: formatNumber(shownU, { decimals: Math.max(0, decimals), decimal: view.decimal }),
+            // An uncertainty below the last digit shown is left out rather than printed as zero.
+            ...(shownU !== undefined && Number(shownU.toFixed(lotDecimals)) > 0
+              ? { expanded: formatNumber(shownU, { decimals: lotDecimals, decimal: view.decimal }) }
+              : {}),
           }
         : {}),
       plan: planText(view, id, display),
@@ -343,6 +345,28 @@ function cautionOf(
         ? `Do not hang it: ${shown(force)} is more than 0.85 of the ${shown(breaking)} at which this string may break. ${care}`
         : `${shown(force)} on a string that may break at ${shown(breaking)}. ${fraction > 0.75 ? 'This is high: stand aside. ' : ''}${care}`,
   }
+}
+
+export interface SoFar {
+  /** Where the readings lie in what the plan allows: 0 at its lower end, 1 at its upper, beyond on either side. */
+  readonly shares: readonly number[]
+}
+
+/** The readings of one row so far, against what the plan leads one to expect. */
+export function soFarOf(view: BenchView, values: Values, fieldId: string): SoFar | undefined {
+  const { diameter, massPerMetre } = view.context.specification
+  const range =
+    fieldId === 'cutMass'
+      ? { lower: massPerMetre.lower * view.plan.cutLength, upper: massPerMetre.upper * view.plan.cutLength }
+      : fieldId.startsWith('d')
+        ? diameter
+        : undefined
+  if (!range) return undefined
+  const shares = Array.from({ length: view.plan.specimens }, (_, index) => {
+    const value = values[cellKey(index + 1, fieldId)]
+    return value ? [(value.si - range.lower) / (range.upper - range.lower)] : []
+  }).flat()
+  return shares.length === 0 ? undefined : { shares }
 }
 
 /** What the plan column says beside each reading. */

@@ -8,6 +8,7 @@ export interface BenchView {
   readonly lot: {
     readonly code: string
     readonly productName: string
+    readonly productCode: string
     /** One line under the title: material, machine, die, made when and by whom. */
     readonly line: string
     readonly state: string
@@ -41,6 +42,7 @@ export interface BenchView {
   readonly equipmentLines: readonly {
     readonly text: string
     readonly due?: string
+    readonly soon?: boolean
     readonly overdue: boolean
   }[]
   readonly driftLine?: string
