@@ -5,18 +5,18 @@ import { evaluateSpecimen } from '@/lib/domain/metrology/evaluate-specimen'
 import { resultRow } from '@/lib/domain/record/result-row'
 import { recordSpecimens } from '@/lib/services/record-specimens'
 import { supersedeReading } from '@/lib/services/supersede-reading'
-import { randomSheet } from '../support/random-sheets'
-import { refusalOf } from '../support/refusal-of'
-import { seededUniform } from '../support/seeded-random'
-import { steelEquipment, steelSheet, typedMass } from '../support/sheets'
+import { randomSheet } from '../../support/random-sheets'
+import { refusalOf } from '../../support/refusal-of'
+import { seededUniform } from '../../support/seeded-random'
+import { steelEquipment, steelSheet, typedMass } from '../../support/sheets'
 import {
   openSteelLot,
   requestOf,
   type SteelWorks,
   setUpSteelWorks,
   worksContext,
-} from '../support/steel-works'
-import { describeOnEachEngine, useFreshDatabase } from '../support/template-database'
+} from '../../support/steel-works'
+import { describeOnEachEngine, useFreshDatabase } from '../../support/template-database'
 
 const countReadings = (lotCode: string) =>
   database().read.reading.count({ where: { specimen: { lot: { code: lotCode } } } })
