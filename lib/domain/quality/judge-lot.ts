@@ -1,6 +1,5 @@
 import type { CharacteristicId } from '../metrology/characteristics'
-import { COVERAGE_FACTOR } from '../metrology/closure'
-import { normalCdf, normalUpperTail } from '../statistics/normal'
+import { conformanceProbability } from './conformance-probability'
 import { type Conformity, judgeSpecimen, type Limits } from './judge-specimen'
 import { type LotSummaryBody, sampleStandardDeviationOf } from './lot-summary'
 
@@ -69,19 +68,3 @@ export function judgeLot(
     verdict: byMean === 'inside' && accepted !== true ? 'not proven' : byMean,
   }
 }
-
-/**
- * Probability that a quantity of which y ± u is known lies inside its limits (either may be missing):
- * Φ((U−y)/u) − Φ((L−y)/u), computed from the tails so that 1 − tiny keeps its meaning.
- * Source: JCGM 106:2012, 7.4.
- */
-export function conformanceProbability(y: number, u: number, limits: Limits): number {
-  if (!(u > 0)) return judgeSpecimen({ value: y, u: 0 }, limits, 0) === 'inside' ? 1 : 0
-  const above = limits.upper === undefined ? 0 : normalUpperTail((limits.upper - y) / u)
-  const below = limits.lower === undefined ? 0 : normalCdf((limits.lower - y) / u)
-  return Math.max(0, 1 - above - below)
-}
-
-/** Width of the guard band of a judgement, r·U. */
-export const guardBand = (judgement: Pick<LotJudgement, 'guardFactor' | 'u'>): number =>
-  judgement.guardFactor * COVERAGE_FACTOR * judgement.u

@@ -51,12 +51,13 @@ export function proposeDisposition(input: ProposalInput): Proposal {
   const closure =
     input.closure && input.closure.u > 0 ? closureVerdict(input.closure.mean, input.closure.u) : undefined
   const stops = stopsOf(input, closure)
-  const reasons = [...input.judgements.map(reasonOf), ...closureReason(input, closure)]
-  const outside = input.judgements.filter((one) => one.verdict === 'outside')
-  const unproven = input.judgements.filter((one) => one.verdict === 'not proven')
-  const judged = input.judgements.length > 0
+  const reasons = [...input.judgements.map((one) => reasonOf(input, one)), ...closureReason(input, closure)]
+  const deciding = input.judgements.filter((one) => !isForInformation(input, one.id))
+  const outside = deciding.filter((one) => one.verdict === 'outside')
+  const unproven = deciding.filter((one) => one.verdict === 'not proven')
+  const judged = deciding.length > 0
   const verb: DispositionVerb | undefined =
-    stops.some((stop) => !stop.id.startsWith('signal-')) || !judged
+    stops.some((stop) => !onlyDemandsAnswer(stop)) || !judged
       ? undefined
       : outside.length > 0 || unproven.length > 0
         ? 'hold'
@@ -65,6 +66,16 @@ export function proposeDisposition(input: ProposalInput): Proposal {
           : 'release'
   return { verb, headline: headlineOf(input, outside, unproven), reasons, stops, closure }
 }
+
+/** Signals and specimens outside demand an answer before release; they do not keep the program from proposing *hold*. */
+const onlyDemandsAnswer = ({ id }: Stop): boolean => id.startsWith('signal-') || id.startsWith('outside-')
+
+/**
+ * Mass per metre has one tolerance and two routes. The weighed one decides; the sounded one stands beside it,
+ * and its disagreement is the closure's business. Where nothing was weighed the sounded one decides.
+ */
+const isForInformation = ({ judgements }: ProposalInput, id: CharacteristicId): boolean =>
+  id === 'massPerMetreSounded' && judgements.some((one) => one.id === 'massPerMetreWeighed')
 
 function stopsOf(input: ProposalInput, closure: ClosureVerdict | undefined): readonly Stop[] {
   const { specimensComplete, specimensPlanned } = input
@@ -84,11 +95,13 @@ function stopsOf(input: ProposalInput, closure: ClosureVerdict | undefined): rea
       id: `closure-open-${one.specimen}`,
       text: `Specimen ${one.specimen} does not close: normalised error ${formatNumber(one.normalisedError, { decimals: 2, sign: 'always' })}, at most 1.5 is doubtful.`,
     })
-  for (const one of input.outside)
+  for (const one of input.outside) {
+    if (isForInformation(input, one.id)) continue
     stops.push({
       id: `outside-${one.specimen}-${one.id}`,
       text: `Specimen ${one.specimen} is outside its tolerance: ${characteristics[one.id].name.toLowerCase()}.`,
     })
+  }
   for (const code of input.overdueEquipment)
     stops.push({ id: `overdue-${code}`, text: `The calibration of ${code} is overdue.` })
   for (const signal of input.openSignals)
@@ -99,9 +112,9 @@ function stopsOf(input: ProposalInput, closure: ClosureVerdict | undefined): rea
 const share = (probability: number): string =>
   probability > 0.999 ? 'more than 0.999' : formatNumber(probability, { decimals: 3 })
 
-function reasonOf(judgement: LotJudgement): Reason {
+function reasonOf(input: ProposalInput, judgement: LotJudgement): Reason {
   const { accepted, acceptanceConstant, id, n, probability, quality, verdict } = judgement
-  const name = characteristics[id].name
+  const name = `${characteristics[id].name}${isForInformation(input, id) ? ' (for information)' : ''}`
   const spread =
     quality === undefined
       ? `n = ${n}`
