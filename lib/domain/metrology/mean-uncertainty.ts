@@ -8,3 +8,14 @@ export function meanUncertainty(n: number, uCommon: number, uRandom: number): nu
   if (!(n >= 1)) throw new RangeError(`mean of ${n} specimens`)
   return Math.sqrt(uCommon * uCommon + (uRandom * uRandom) / n)
 }
+
+/**
+ * Correlation of the results of two specimens that share a part of their uncertainty:
+ * r = u_common²/(u_common² + u_random²). Undefined when there is no uncertainty at all.
+ * Source: JCGM 100:2008, F.1.2.3.
+ */
+export function correlationOfSpecimens(uCommon: number, uRandom: number): number | undefined {
+  const common = uCommon * uCommon
+  const all = common + uRandom * uRandom
+  return all > 0 ? common / all : undefined
+}

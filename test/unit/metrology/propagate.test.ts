@@ -1,9 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { closureVerdict, normalisedError } from '@/lib/domain/metrology/closure'
-import { meanUncertainty } from '@/lib/domain/metrology/mean-uncertainty'
 import { type ModelInput, propagate } from '@/lib/domain/metrology/propagate'
-import { resolutionUncertainty, standardUncertaintyFromBounds } from '@/lib/domain/metrology/type-b'
 
 const input = (id: string, value: number, u: number, common = false): ModelInput => ({
   id,
@@ -52,37 +49,17 @@ describe('propagate(inputs, model)', () => {
     const model = ({ a = 0 }): { y?: number } => (a > 10 ? { y: a } : {})
     expect(propagate([input('a', 3, 0.3)], model)).toEqual({})
   })
-})
 
-describe('meanUncertainty(n, uCommon, uRandom)', () => {
-  it('does not divide the common part: n 10, 3.5e-4, 4e-4 gives 3.7216e-4', () => {
-    // Source: computed for physics.json, mean-with-common-uncertainty.
-    expect(meanUncertainty(10, 3.5e-4, 4e-4)).toBeCloseTo(3.721558813e-4, 12)
+  it('leaves out a result that is missing one standard uncertainty away, rather than telling too little', () => {
+    const model = ({ a = 0, b = 0 }): { y?: number; z: number } => ({ z: b, ...(a > 2.8 ? { y: a } : {}) })
+    const found = propagate([input('a', 3, 0.3), input('b', 1, 0.1)], model)
+    expect(found.y).toBeUndefined()
+    expect(found.z?.estimate.u).toBeCloseTo(0.1, 12)
   })
 
-  it('throws for no specimens', () => {
-    expect(() => meanUncertainty(0, 1, 1)).toThrow(RangeError)
-  })
-})
-
-describe('closure', () => {
-  it('is closed to a normalised error of 1, doubtful to 1.5, open above', () => {
-    expect(closureVerdict(0.002, 0.001)).toBe('closed')
-    expect(closureVerdict(-0.003, 0.001)).toBe('doubtful')
-    expect(closureVerdict(0.00301, 0.001)).toBe('open')
-  })
-
-  it('throws without an uncertainty', () => {
-    expect(() => normalisedError(0.1, 0)).toThrow(/standard uncertainty 0/)
-  })
-})
-
-describe('type B', () => {
-  it('takes a half-width over √3 or √6, a step over √12', () => {
-    // Source: JCGM 100:2008, 4.3.7, 4.3.9, F.2.2.1.
-    expect(standardUncertaintyFromBounds(0.0005)).toBeCloseTo(0.0002886751345948129, 18)
-    expect(standardUncertaintyFromBounds(6, 'triangular')).toBeCloseTo(2.449489742783178, 14)
-    expect(resolutionUncertainty(1)).toBeCloseTo(1 / Math.sqrt(12), 15)
-    expect(() => standardUncertaintyFromBounds(-1)).toThrow(RangeError)
+  it('has no line for an input that does not matter, nor for one without uncertainty', () => {
+    const inputs = [input('a', 3, 0.3), input('b', 1, 0.1), input('c', 1, 0)]
+    const { y } = propagate(inputs, ({ a = 0, c = 0 }) => ({ y: a + c }))
+    expect(y?.budget.map((line) => line.input)).toEqual(['a'])
   })
 })
