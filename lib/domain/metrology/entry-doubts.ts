@@ -1,5 +1,5 @@
 import { formatQuantity } from '../units/format'
-import { fromSi, toSi, type UnitId } from '../units/unit'
+import { fromSi, toSi, type UnitId, unit as unitOf, unitsOf } from '../units/unit'
 
 export type DoubtChoice =
   | { readonly kind: 'measure-again' }
@@ -8,7 +8,7 @@ export type DoubtChoice =
 
 /** A question about an entry. Nothing is changed before a person has answered. */
 export interface EntryDoubt {
-  readonly kind: 'ratio' | 'digits' | 'far'
+  readonly kind: 'ratio' | 'digits' | 'unit' | 'far'
   readonly question: string
   readonly detail: string
   readonly choices: readonly DoubtChoice[]
@@ -58,22 +58,43 @@ function ratioDoubt(
  * as typed is not. 327.9 typed for 329.7 is 0.5 % off: it is asked about when the usual departure is smaller.
  */
 function swappedDigits(facts: EntryFacts): { readonly typed: string; readonly si: number } | undefined {
-  const { expected, si, typed, unit, usual } = facts
+  const { expected, si, unit, usual } = facts
+  const { digits, rest } = partsOf(facts.typed)
   const candidates: { typed: string; si: number }[] = []
-  for (let index = 0; index + 1 < typed.length; index += 1) {
+  for (let index = 0; index + 1 < digits.length; index += 1) {
     // The two digits may stand on either side of the decimal sign.
-    const next = /[.,]/.test(typed[index + 1] ?? '') ? index + 2 : index + 1
-    const [left, right] = [typed[index] ?? '', typed[next] ?? '']
+    const next = /[.,]/.test(digits[index + 1] ?? '') ? index + 2 : index + 1
+    const [left, right] = [digits[index] ?? '', digits[next] ?? '']
     if (!/\d/.test(left) || !/\d/.test(right) || left === right) continue
-    const letters = [...typed]
+    const letters = [...digits]
     letters[index] = right
     letters[next] = left
     const text = letters.join('')
-    const value = toSi(Number(text.replace(',', '.')), unit)
-    if (Number.isFinite(value) && away(value, expected) <= usual) candidates.push({ typed: text, si: value })
+    const value = toSi(numberOf(text), unit)
+    if (Number.isFinite(value) && away(value, expected) <= usual)
+      candidates.push({ typed: text + rest, si: value })
   }
   candidates.sort((a, b) => away(a.si, expected) - away(b.si, expected))
   return away(si, expected) > usual ? candidates[0] : undefined
+}
+
+/** The number of an entry, and the unit typed behind it, if any. */
+function partsOf(typed: string): { readonly digits: string; readonly rest: string } {
+  const digits = /^[\d.,]*/.exec(typed.trim())?.[0] ?? ''
+  return { digits, rest: typed.trim().slice(digits.length) }
+}
+
+const numberOf = (digits: string): number => (digits === '' ? Number.NaN : Number(digits.replace(',', '.')))
+
+/** The same digits in another unit of the dimension, where that is what is expected: 254 mm for 254 µm. */
+function otherUnit({ decimals, expected, typed, unit, usual }: EntryFacts) {
+  const value = numberOf(partsOf(typed).digits)
+  const found = unitsOf(unitOf(unit).dimension).find(
+    (other) => other !== unit && away(toSi(value, other), expected) <= usual,
+  )
+  if (found === undefined) return undefined
+  const si = toSi(value, found)
+  return { si, unit: found, typed: String(Number(fromSi(si, unit).toFixed(decimals + 2))) }
 }
 
 const show = ({ unit, decimals }: EntryFacts, si: number): string =>
@@ -97,7 +118,7 @@ export function doubtFrequency(facts: EntryFacts): EntryDoubt | undefined {
   }
 }
 
-/** Any entry: swapped digits first, then a departure that is far from ordinary. */
+/** Any entry: swapped digits first, then another unit, then a departure that is far from ordinary. */
 export function doubtDigits(facts: EntryFacts): EntryDoubt | undefined {
   const swapped = swappedDigits(facts)
   if (swapped)
@@ -108,6 +129,18 @@ export function doubtDigits(facts: EntryFacts): EntryDoubt | undefined {
       choices: [{ kind: 'measure-again' }, { kind: 'meant', ...swapped }, { kind: 'keep' }],
     }
   if (away(facts.si, facts.expected) <= 3 * facts.usual) return undefined
+  const other = otherUnit(facts)
+  if (other)
+    return {
+      kind: 'unit',
+      question: `Is ${facts.typed} meant in ${other.unit}?`,
+      detail: `${facts.because} Nothing has been changed.`,
+      choices: [
+        { kind: 'measure-again' },
+        { kind: 'meant', si: toSi(Number(other.typed), facts.unit), typed: other.typed },
+        { kind: 'keep' },
+      ],
+    }
   return {
     kind: 'far',
     question: `Is ${facts.name.toLowerCase()} really ${show(facts, facts.si)}?`,

@@ -3,7 +3,7 @@ import { faultResiduals } from '../metrology/fault-residuals'
 import { correlationOfSpecimens, meanUncertainty } from '../metrology/mean-uncertainty'
 import { type PowerFactor, powerProductUncertainty } from '../metrology/power-product-uncertainty'
 import { routeConsistency } from '../metrology/route-consistency'
-import { standardUncertaintyFromBounds } from '../metrology/type-b'
+import { type BoundsDistribution, standardUncertaintyFromBounds } from '../metrology/type-b'
 import { type Inputs, numberOf, numbersOf, optionalNumberOf, type QuantityTable, textOf } from './inputs'
 import { conformityQuantities } from './metrology-conformity'
 import { guideQuantities } from './metrology-guide'
@@ -53,7 +53,12 @@ const routeQuantities: QuantityTable = {
   'standard-uncertainty-type-b': (inputs) => ({
     u: standardUncertaintyFromBounds(
       numberOf(inputs, 'half_width'),
-      textOf(inputs, 'distribution', ['rectangular', 'triangular', 'arcsine', 'normal-95']),
+      textOf<BoundsDistribution>(inputs, 'distribution', [
+        'rectangular',
+        'triangular',
+        'arcsine',
+        'normal-95',
+      ]),
     ),
   }),
   'effective-degrees-of-freedom': (inputs) => {

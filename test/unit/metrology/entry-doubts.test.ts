@@ -50,6 +50,59 @@ describe('doubtDigits(facts)', () => {
     expect(doubtDigits({ ...frequency('328.2'), usual: 0.02 })).toBeUndefined()
   })
 
+  it('finds swapped digits also before a unit that was typed', () => {
+    const tight = { ...frequency('327.9'), typed: '327.9 Hz', expected: 329.7, usual: 0.002 }
+    expect(doubtDigits(tight)).toMatchObject({ kind: 'digits', choices: [{}, { typed: '329.7 Hz' }, {}] })
+  })
+
+  it('asks about another unit where the same digits would fit in it', () => {
+    const facts: EntryFacts = {
+      name: 'Diameter',
+      unit: 'mm',
+      decimals: 4,
+      typed: '254 mm',
+      si: 0.254,
+      expected: 254e-6,
+      usual: 0.02,
+      because: 'This product is 0.2540 mm by its specification.',
+    }
+    const doubt = doubtDigits(facts)
+    expect(doubt).toMatchObject({ kind: 'unit', question: 'Is 254 mm meant in µm?' })
+    expect(doubt?.choices[1]).toMatchObject({ kind: 'meant', typed: '0.254' })
+    const thou = doubtDigits({ ...facts, typed: '10', si: 0.01 })
+    expect(thou?.question).toBe('Is 10 meant in thou?')
+    expect(thou?.choices[1]).toMatchObject({ typed: '0.254' })
+  })
+
+  it('never asks about what is expected, whatever the digits', () => {
+    fc.assert(
+      fc.property(
+        fc.double({ min: 50, max: 900, noNaN: true }),
+        fc.double({ min: -1, max: 1 }),
+        (f, share) => {
+          const facts = { ...frequency((f * (1 + 0.01 * share)).toFixed(2)), expected: f, usual: 0.0101 }
+          expect(doubtFrequency(facts)).toBeUndefined()
+        },
+      ),
+    )
+  })
+
+  it('finds every swap of two neighbouring digits that matters', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1000, max: 9999 }), fc.integer({ min: 0, max: 2 }), (tenths, place) => {
+        const right = (tenths / 10).toFixed(1).replace('.', '')
+        const letters = [...right]
+        ;[letters[place], letters[place + 1]] = [letters[place + 1] ?? '', letters[place] ?? '']
+        const typed = `${letters.slice(0, 3).join('')}.${letters[3]}`
+        const expected = tenths / 10
+        fc.pre(Math.abs(Number(typed) / expected - 1) > 0.0011)
+        const doubt = doubtDigits({ ...frequency(typed), expected, usual: 0.001 })
+        expect(doubt?.kind).toBe('digits')
+        expect(doubt?.choices).toContainEqual({ kind: 'meant', typed: expected.toFixed(1), si: expected })
+      }),
+    )
+  })
+
   it('asks about a value far off that no swap explains', () => {
     expect(doubtDigits(frequency('411.1'))).toMatchObject({ kind: 'far' })
   })
