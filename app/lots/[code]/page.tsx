@@ -1,0 +1,71 @@
+import type { Metadata } from 'next'
+import Link from 'next/link'
+import { roomPage } from '@/app/_page'
+import { EmptyState } from '@/app/_ui/shell/EmptyState'
+import { may } from '@/lib/access/permit'
+import { isFinal } from '@/lib/domain/record/lot-state'
+import { getLot } from '@/lib/services/get-lot'
+import { History } from '../_ui/History'
+import { LotHead } from '../_ui/LotHead'
+import { ResultsTable } from '../_ui/ResultsTable'
+import { Specimens } from '../_ui/Specimens'
+import '@/app/_ui/charts/charts.css'
+import '../lots.css'
+
+export const metadata: Metadata = { title: 'Lot' }
+
+export default roomPage(async (actor, { params }) => {
+  const view = await getLot(actor, params.code ?? '')
+  const { assessment, lot, signals } = view
+  const open = signals.filter((one) => one.state === 'open')
+  return (
+    <>
+      <LotHead
+        view={view}
+        tab="lot"
+        mayMeasure={may(actor, 'readings.record') && !isFinal(lot.state)}
+        maySeeDrift={may(actor, 'drift.read')}
+      />
+      <p className="lots-verdict">
+        {assessment.proposal.headline}{' '}
+        {open.length > 0 ? <span className="vermilion">The process has signalled.</span> : null}
+      </p>
+      {signals.length > 0 ? (
+        <ul className="rows">
+          {signals.map((signal) => (
+            <li key={signal.id}>
+              <Link href={`/drift?product=${encodeURIComponent(signal.productCode)}#signal-${signal.id}`}>
+                {signal.sentence}
+              </Link>
+              <em className={signal.state === 'open' ? 'vermilion' : 'slate'}>
+                {signal.state === 'open'
+                  ? 'open'
+                  : signal.state === 'answered'
+                    ? `answered: ${signal.cause}`
+                    : 'no longer holds'}
+              </em>
+            </li>
+          ))}
+        </ul>
+      ) : null}
+      {view.specimens.length === 0 ? (
+        <EmptyState title="Nothing measured yet.">
+          The plan asks for {view.specification.body.plan.specimens} specimens; they are measured at the
+          bench.
+        </EmptyState>
+      ) : (
+        <>
+          <section className="section">
+            <h2>
+              Results{' '}
+              <small>note = lot mean ± U (k = 2), open notes = specimens, hatching = guard band</small>
+            </h2>
+            <ResultsTable view={view} />
+          </section>
+          <Specimens view={view} />
+        </>
+      )}
+      <History view={view} />
+    </>
+  )
+})
