@@ -43,7 +43,11 @@ const signedOnes = new Set<CharacteristicId>([
 ])
 
 const probabilityText = (probability: number): string =>
-  probability > 0.999 ? '> 0.999' : formatNumber(probability, { decimals: 3 })
+  probability > 0.999
+    ? '> 0.999'
+    : probability < 0.001
+      ? '< 0.001'
+      : formatNumber(probability, { decimals: 3 })
 
 /** Lot mean ± U on a strip with its specimens, tolerance, guard band and control limits; the verdict in a word. */
 export function ResultsTable({ view }: { readonly view: LotView }) {

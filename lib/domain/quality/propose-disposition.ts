@@ -95,11 +95,15 @@ function stopsOf(input: ProposalInput, closure: ClosureVerdict | undefined): rea
       id: `closure-open-${one.specimen}`,
       text: `Specimen ${one.specimen} does not close: normalised error ${formatNumber(one.normalisedError, { decimals: 2, sign: 'always' })}, at most 1.5 is doubtful.`,
     })
-  for (const one of input.outside) {
-    if (isForInformation(input, one.id)) continue
+  // One answer a specimen: what is wrong with a piece of string shows in several of its results.
+  const outside = input.outside.filter((one) => !isForInformation(input, one.id))
+  for (const specimen of new Set(outside.map((one) => one.specimen))) {
+    const names = outside
+      .filter((one) => one.specimen === specimen)
+      .map((one) => characteristics[one.id].name.toLowerCase())
     stops.push({
-      id: `outside-${one.specimen}-${one.id}`,
-      text: `Specimen ${one.specimen} is outside its tolerance: ${characteristics[one.id].name.toLowerCase()}.`,
+      id: `outside-${specimen}`,
+      text: `Specimen ${specimen} is outside its tolerance: ${names.join('; ')}.`,
     })
   }
   for (const code of input.overdueEquipment)

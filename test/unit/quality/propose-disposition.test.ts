@@ -47,11 +47,26 @@ describe('proposeDisposition(input)', () => {
     expect(both.stops).toHaveLength(1)
   })
 
+  it('asks once for each specimen that is outside, naming everything it is outside of', () => {
+    const outside = [
+      { specimen: 2, id: 'diameter' as const },
+      { specimen: 2, id: 'tension' as const },
+      { specimen: 4, id: 'diameter' as const },
+    ]
+    expect(proposeDisposition({ ...clean, outside }).stops).toEqual([
+      {
+        id: 'outside-2',
+        text: 'Specimen 2 is outside its tolerance: diameter; tension at the reference note.',
+      },
+      { id: 'outside-4', text: 'Specimen 4 is outside its tolerance: diameter.' },
+    ])
+  })
+
   it.each([
     ['an incomplete plan', { specimensComplete: 4 }, 'plan-incomplete'],
     ['an open closure of the lot', { closure: { mean: 0.004, u: 0.001 } }, 'closure-open'],
     ['overdue equipment', { overdueEquipment: ['M-14'] }, 'overdue-M-14'],
-    ['a specimen outside', { outside: [{ specimen: 2, id: 'diameter' as const }] }, 'outside-2-diameter'],
+    ['a specimen outside', { outside: [{ specimen: 2, id: 'diameter' as const }] }, 'outside-2'],
   ])('stops at %s', (_, change, id) => {
     const proposal = proposeDisposition({ ...clean, ...change })
     expect(proposal.verb).toBeUndefined()

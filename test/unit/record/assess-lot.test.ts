@@ -56,7 +56,7 @@ describe('assessLot', () => {
     }
     const { proposal, specimens } = assessLot(lotOf([{}, {}, oval, {}, {}]))
     expect(specimens[2]?.verdicts.ovality).toBe('outside')
-    expect(proposal.stops.map((stop) => stop.id)).toContain('outside-3-ovality')
+    expect(proposal.stops.map((stop) => stop.id)).toContain('outside-3')
   })
 
   it('asks about a specimen whose routes disagree', () => {

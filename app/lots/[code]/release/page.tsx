@@ -52,7 +52,8 @@ export default roomPage(async (actor, { params }) => {
             <h2>
               Proposed: {proposal.verb ? verbWords[proposal.verb].name.toLowerCase() : 'nothing yet'}{' '}
               <small>
-                k = {specification.body.plan.acceptanceConstant}, {assessment.progress.complete} of{' '}
+                k = {specification.body.plan.acceptanceConstant},{' '}
+                {assessment.specimens.filter((one) => one.missing.length === 0).length} of{' '}
                 {specification.body.plan.specimens} specimens complete
               </small>
             </h2>
