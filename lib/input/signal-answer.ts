@@ -10,3 +10,10 @@ export const answerSignalSchema = z.strictObject({
 })
 
 export type AnswerSignalInput = z.output<typeof answerSignalSchema>
+
+/** A signal as it stands in an address. */
+export const signalIdSchema = z.coerce
+  .number({ error: 'A signal is named by its number.' })
+  .int({ error: 'A signal is named by its number.' })
+  .min(1, { error: 'A signal is named by its number.' })
+  .max(2_147_483_647, { error: 'There is no such signal.' })

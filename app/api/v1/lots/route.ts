@@ -1,0 +1,8 @@
+import { changing, parsedOrThrow, reading } from '@/app/api/_route'
+import { listLotsSchema, openLotSchema } from '@/lib/input/lot'
+import { listLots } from '@/lib/services/list-lots'
+import { openLot } from '@/lib/services/open-lot'
+
+export const GET = reading((actor, query) => listLots(actor, parsedOrThrow(listLotsSchema, query)))
+
+export const POST = changing(openLotSchema, (actor, input) => openLot(actor, input), 201)
