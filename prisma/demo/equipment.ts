@@ -75,7 +75,8 @@ export const demoRig = {
   endCondition: 'knife',
   // Found by two spacings.
   uEndRelative: 2e-4,
-  frictionHalfWidth: 1.2e-3,
+  // Half the difference between loading from above and from below, with room for the worst.
+  frictionHalfWidth: 1.5e-3,
   hangingLengthMetres: 0.3,
   hangerCode: 'H-01',
   weightCodes: ['W-05', 'W-02'],

@@ -1,22 +1,9 @@
 import type { SpecimenSheet, TypedValue } from '@/lib/domain/metrology/sheet'
-import { airDensity } from '@/lib/domain/strings/air-density'
-import { airViscosity } from '@/lib/domain/strings/air-viscosity'
-import { deadWeightForce, hangingStringForce } from '@/lib/domain/strings/dead-weight-force'
 import { localGravity } from '@/lib/domain/strings/normal-gravity'
-import { solidWireMassPerMetre } from '@/lib/domain/strings/round-section'
-import { soundedFundamental } from '@/lib/domain/strings/sounding-forward'
-import { plainWireAxialStiffness, plainWireBendingStiffness } from '@/lib/domain/strings/stiffness'
-import {
-  degreesCelsius,
-  hertz,
-  kilograms,
-  kilogramsPerCubicMetre,
-  metres,
-  newtons,
-  pascals,
-} from '@/lib/domain/units/quantity'
+import { degreesCelsius, hertz, kilograms, metres } from '@/lib/domain/units/quantity'
 import { toSi, type UnitId } from '@/lib/domain/units/unit'
 import { demoRig, demoWeights, demoWorks } from './equipment'
+import { type Bench, perfectReadings, type TrueString } from './perfect-readings'
 import type { DemoProduct } from './products'
 import { type Random, seededRandom } from './random'
 import { type DemoSchedule, inZeroWeek, WORN_DIE, ZERO_WEEK } from './schedule'
@@ -30,7 +17,7 @@ interface TrueLot {
   readonly ovality: number
   readonly celsius: number
   /** Share by which the load pulls less or more than reckoned while this lot is sounded. */
-  readonly hang: number
+  readonly pull: number
   /** What the zero of the micrometer stands off, metres. */
   readonly zero: number
 }
@@ -40,6 +27,7 @@ const hangingMass = demoWeights
   .filter(({ code }) => code === demoRig.hangerCode || demoRig.weightCodes.some((one) => one === code))
   .reduce((sum, { conventionalMass }) => sum + conventionalMass, 0)
 
+/** Between lots: 0.6 µm in diameter, 0.1 % in density, 0.07 % in the pull, 0.4 µm in the micrometer's zero. */
 function trueLot(product: DemoProduct, lot: DemoSchedule, random: Random): TrueLot {
   const age = lot.dieCode === WORN_DIE.code ? lot.index - WORN_DIE.from + 1 : 0
   return {
@@ -48,7 +36,7 @@ function trueLot(product: DemoProduct, lot: DemoSchedule, random: Random): TrueL
     density: 7850 * (1 + 0.001 * random.normal(2)),
     ovality: 0.6e-6 * random.uniform(),
     celsius: 20 + random.normal(2) * 0.5,
-    hang: 0.0006 * random.normal(1.8),
+    pull: 0.0008 * random.normal(1.8),
     zero: 0.4e-6 * random.normal(2) + (inZeroWeek(lot.day) ? ZERO_WEEK.error : 0),
   }
 }
@@ -73,62 +61,57 @@ export function readLot(product: DemoProduct, lot: DemoSchedule): readonly Speci
   const truth = trueLot(product, lot, random)
   return product.specification.plan.takenAt.map((end) => {
     const alongLot = (end === 'head' ? -0.5 : 0.5) * truth.taper
-    return readSpecimen(product, truth, truth.diameter + alongLot + 0.35e-6 * random.normal(2.5), end, random)
+    const diameter = truth.diameter + alongLot + 0.35e-6 * random.normal(2.5)
+    return readSpecimen(product, truth, diameter, end, random)
   })
 }
 
+const trueString = (diameter: number, density: number): TrueString => ({
+  diameter,
+  density,
+  modulus: 206e9,
+  expansion: 11.5e-6,
+})
+
+const benchOf = ({ specification }: DemoProduct, lot: TrueLot, friction: number, cut: number): Bench => ({
+  celsius: lot.celsius,
+  gravity,
+  hangingMass,
+  hangingLength: demoRig.hangingLengthMetres,
+  reckonedMassPerMetre: specification.massPerMetre.target,
+  pull: lot.pull + friction,
+  span: demoRig.spanMetres,
+  endCondition: demoRig.endCondition,
+  cutLength: cut,
+})
+
 function readSpecimen(
-  { specification }: DemoProduct,
+  product: DemoProduct,
   lot: TrueLot,
   diameter: number,
   end: 'head' | 'tail',
   random: Random,
 ): SpecimenSheet {
-  const d = metres(diameter)
-  const density = kilogramsPerCubicMetre(lot.density)
-  const air = { temperature: degreesCelsius(lot.celsius), pressure: pascals(101325), humidity: 0.5 }
-  const airRho = airDensity(air)
-  const perMetre = solidWireMassPerMetre(d, density)
-  const modulus = pascals(206e9)
-
+  const { cutLength } = product.specification.plan
+  const friction = 0.0004 * (2 * random.uniform() - 1)
+  const cut = cutLength + 0.05e-3 * random.normal(2)
+  const perfect = perfectReadings(trueString(diameter, lot.density), benchOf(product, lot, friction, cut))
   const diameters = [1, 2, 3].flatMap((position) =>
     (['a', 'b'] as const).map((direction) => {
-      const read =
-        diameter + (direction === 'a' ? 0.5 : -0.5) * lot.ovality + lot.zero + 0.5e-6 * random.normal(2.5)
+      const oval = (direction === 'a' ? 0.5 : -0.5) * lot.ovality
+      const read = perfect.diameter + oval + lot.zero + 0.5e-6 * random.normal(2.5)
       return { position, direction, value: typedValue(read, 'mm', 1e3, 4, metres) }
     }),
-  )
-
-  const cut = specification.plan.cutLength
-  const pieceLength = cut + 0.05e-3 * random.normal(2)
-  const pieceMass = (perMetre * pieceLength * (1 - airRho / density)) / (1 - airRho / 8000)
-  const cutMass = typedValue(pieceMass + 1e-8 * random.normal(2), 'mg', 1e6, 2, kilograms)
-
-  const span = metres(demoRig.spanMetres)
-  const hung = deadWeightForce(kilograms(hangingMass), gravity, airRho)
-  const below = hangingStringForce(perMetre, metres(demoRig.hangingLengthMetres), gravity)
-  const friction = 0.0004 * (2 * random.uniform() - 1)
-  const heard = soundedFundamental(
-    {
-      force: newtons((hung + below) * (1 + lot.hang + friction)),
-      span,
-      endCondition: demoRig.endCondition,
-      axialStiffness: plainWireAxialStiffness(modulus, d),
-      bendingStiffness: plainWireBendingStiffness(modulus, d),
-      outerDiameter: d,
-      air: { density: airRho, viscosity: airViscosity(air.temperature, airRho) },
-    },
-    perMetre,
   )
   return {
     takenAt: { end },
     diameters,
     weighedState: 'slack',
-    cutLength: typedValue(cut, 'mm', 1e3, 1, metres),
-    cutMass,
+    cutLength: typedValue(cutLength, 'mm', 1e3, 1, metres),
+    cutMass: typedValue(perfect.cutMass + 1e-8 * random.normal(2), 'mg', 1e6, 2, kilograms),
     load: { kind: 'weights', hanger: demoRig.hangerCode, weights: [...demoRig.weightCodes] },
-    span: typedValue(span, 'mm', 1e3, 1, metres),
-    frequencies: [typedValue(heard, 'Hz', 1, 2, hertz)],
+    span: typedValue(demoRig.spanMetres, 'mm', 1e3, 1, metres),
+    frequencies: [typedValue(perfect.frequency, 'Hz', 1, 2, hertz)],
     temperature: typedValue(lot.celsius, '°C', 1, 1, degreesCelsius),
     keptDoubts: [],
   }
