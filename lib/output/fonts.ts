@@ -6,7 +6,8 @@ const require = createRequire(import.meta.url)
 
 const folderOf = (name: string): string => dirname(require.resolve(`@expo-google-fonts/${name}/package.json`))
 
-const face = (name: string, folder: string, file: string): string => join(folderOf(name), folder, `${file}.ttf`)
+const face = (name: string, folder: string, file: string): string =>
+  join(folderOf(name), folder, `${file}.ttf`)
 
 /** Font files of everything that leaves the works as PDF or picture: whole faces with ≤ √ σ, and ♯ ♭ from the last. */
 export const fontFiles = {

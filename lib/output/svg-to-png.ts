@@ -28,6 +28,8 @@ export function svgToPng(svg: string, scale = 2): Uint8Array {
     },
   })
   if (picture.width * picture.height * scale * scale > MOST_PIXELS)
-    throw new RangeError(`a picture of ${picture.width} × ${picture.height} px at scale ${scale} is too large`)
+    throw new RangeError(
+      `a picture of ${picture.width} × ${picture.height} px at scale ${scale} is too large`,
+    )
   return picture.render().asPng()
 }
