@@ -17,8 +17,6 @@ const config: NextConfig = {
   poweredByHeader: false,
   reactStrictMode: true,
   serverExternalPackages: keptOutside,
-  // Built into another folder by the end-to-end tests when they must not touch the one being served.
-  distDir: process.env.LEDGERLINE_DIST_DIR ?? '.next',
   // `npm test` checks types in a stage of its own over all files, the build checks what it builds.
   typescript: { ignoreBuildErrors: false },
 }

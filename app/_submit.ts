@@ -25,12 +25,12 @@ export const valuesOf = (form: FormData, name: string): readonly string[] =>
   texts(form).flatMap(([one, value]) => (one === name ? [value] : []))
 
 /** Never given back: a password is typed again. */
-const secret = /password|code$/i
+const secret = /password|^current$/i
 
 const givenBack = (form: FormData): FormState['values'] => {
   const values: Record<string, string[]> = {}
   for (const [name, value] of texts(form)) {
-    if (!secret.test(name) || name === 'code') values[name] = [...(values[name] ?? []), value]
+    if (!secret.test(name)) values[name] = [...(values[name] ?? []), value]
   }
   return values
 }

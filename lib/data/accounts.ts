@@ -56,3 +56,11 @@ export const updatePassword = async (
 export const deleteSessions = async (tx: Tx, userId: string): Promise<void> => {
   await tx.session.deleteMany({ where: { userId } })
 }
+
+export const getPasswordHash = async (tx: Tx, userId: string): Promise<string | undefined> => {
+  const row = await tx.account.findFirst({
+    where: { userId, providerId: provider },
+    select: { password: true },
+  })
+  return row?.password ?? undefined
+}

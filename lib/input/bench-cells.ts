@@ -82,9 +82,7 @@ export function shiftFrom<Value>(
 ): Readonly<Record<string, Value>> | undefined {
   const start = order.find((cell) => cell.key === key)
   if (!start) return undefined
-  const lane = order.filter(
-    (cell) => cell.field.station === start.field.station && !locked(cell.specimen),
-  )
+  const lane = order.filter((cell) => cell.field.station === start.field.station && !locked(cell.specimen))
   const from = lane.findIndex((cell) => cell.key === key)
   if (from < 0) return undefined
   const gap = lane.findIndex((cell, index) => index >= from && values[cell.key] === undefined)

@@ -252,7 +252,7 @@ export function parseSpecification(fields: FormFields, diameterUnit: UnitId): Re
     massTolerance: quantityField(fields, 'massTolerance', percent('Tolerance of the mass per metre', 0.5)),
     ovalityMax: quantityField(fields, 'ovalityMax', length('Ovality at most', 'µm', 1e-8, 1e-3)),
     densityTolerance: quantityField(fields, 'densityTolerance', percent('Tolerance of the density', 0.5)),
-    midi: parseNote(fields.note4 ?? '', 'note4'),
+    midi: parseNote(fields.referenceNote ?? '', 'referenceNote'),
     a4: quantityField(fields, 'a4', {
       name: 'Concert A',
       dimension: 'frequency',

@@ -9,7 +9,9 @@ export const decideLotSchema = z.strictObject({
   lotVersion: z.int().min(1),
   /** Answers to what stops the proposal, by the stop's id. */
   answers: z
-    .array(z.strictObject({ stopId: plainText('Stop', { max: 80 }), answer: paragraphs('Answer', { min: 3 }) }))
+    .array(
+      z.strictObject({ stopId: plainText('Stop', { max: 80 }), answer: paragraphs('Answer', { min: 3 }) }),
+    )
     .max(200)
     .default([]),
 })

@@ -125,3 +125,14 @@ export const parseSignIn = (fields: FormFields): Result<SignInInput> => {
     return refused({ code: 'bad-input', message: 'Name or password is far too long.', where: 'username' })
   return ok({ username, password, stay: fields.stay === 'yes' })
 }
+
+export interface OwnPasswordInput {
+  readonly current: string
+  readonly password: string
+}
+
+export const parseOwnPassword = (fields: FormFields): Result<OwnPasswordInput> =>
+  collect({
+    current: ok((fields.current ?? '').slice(0, mostPassword)),
+    password: passwordField(fields),
+  })

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { metres } from '@/lib/domain/units/quantity'
 import type { InspectionPlan } from '@/lib/domain/metrology/specification'
+import { metres } from '@/lib/domain/units/quantity'
 import { benchFields, cellOrder, nextCell, shiftFrom } from '@/lib/input/bench-cells'
 
 const plan: InspectionPlan = {
