@@ -10,29 +10,13 @@ import { listProductSignals } from '@/lib/data/signals'
 import { findSpecification, findSpecificationInForce, specificationBodyOf } from '@/lib/data/specifications'
 import type { StaffChartInput } from '@/lib/domain/charts/staff-chart'
 import { problem } from '@/lib/domain/errors'
-import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
 import type { SpecificationBody } from '@/lib/domain/metrology/specification'
-import type { ChartedStatistic } from '@/lib/domain/record/chart-history'
 import { type DriftChart, type DriftLot, staffChartInput } from '@/lib/domain/record/staff-chart-input'
+import { type ChartChoice, defaultCharts } from '@/lib/input/drift-view'
 import { getWorks, type WorksFacts } from './get-works'
 import { type LimitSetView, limitSetView } from './limit-set-view'
 import { monthAndYear, shortDate } from './short-date'
 import { type SignalView, signalViews } from './signal-views'
-
-export interface ChartChoice {
-  readonly characteristic: CharacteristicId
-  readonly statistic: ChartedStatistic
-}
-
-/** The staves of a product's chart unless others are chosen; density is the tie-breaker. */
-export const defaultCharts: readonly ChartChoice[] = [
-  { characteristic: 'diameter', statistic: 'mean' },
-  { characteristic: 'massPerMetreWeighed', statistic: 'mean' },
-  { characteristic: 'closure', statistic: 'mean' },
-  { characteristic: 'massPerMetreWeighed', statistic: 'within-lot-sd' },
-]
-
-export const densityChart: ChartChoice = { characteristic: 'effectiveDensity', statistic: 'mean' }
 
 export interface DriftView {
   readonly product: { readonly code: string; readonly name: string; readonly construction: string }

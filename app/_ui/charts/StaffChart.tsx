@@ -33,6 +33,8 @@ export interface StaffChartProps {
   readonly onPointer?: (index: number | undefined) => void
   /** Called by Enter on a lot; without it the lot's page is opened. */
   readonly onOpen?: (code: string) => void
+  /** Called when a slur is followed. */
+  readonly onSignal?: (signal: string) => void
   /** Fixed width in px; without it the chart follows its place on the page. */
   readonly width?: number
 }
@@ -88,6 +90,9 @@ export function StaffChart(props: StaffChartProps) {
   const click = (event: MouseEvent<HTMLElement>): void => {
     if (freshTap.current) event.preventDefault()
     freshTap.current = false
+    const slur = event.target instanceof Element ? event.target.closest('[data-mark="slur"]') : null
+    const signal = slur?.getAttribute('data-signal')
+    if (signal) props.onSignal?.(signal)
   }
   const move = (event: KeyboardEvent<HTMLElement>): void => {
     const { key } = event

@@ -18,6 +18,7 @@ const END_OFFSET = 8
 const MOST_END_OFFSET = 30
 /** Flatter than this a slur reads as a line. */
 const LEAST_HEIGHT = 6
+const WIDE_STEP = 6
 const EXTRA_OFFSET_COST = 0.7
 /** How much nearer the handles of the inner edge lie: three quarters of it is the thickness in the middle. */
 const TAPER = 2.1
@@ -130,8 +131,9 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
   const inner = neighboursOf(notes.slice(1, -1), curveOf(first, last, side, 0, 0, 0))
   const spread = Math.max(...notes.map(([, y]) => y)) - Math.min(...notes.map(([, y]) => y))
   let best: { cost: number; curve: SlurCurve } | undefined
-  for (let e1 = END_OFFSET; e1 <= MOST_END_OFFSET; e1 += 2)
-    for (let e2 = END_OFFSET; e2 <= MOST_END_OFFSET; e2 += 2) {
+  const offsets = endOffsets(spread)
+  for (const e1 of offsets)
+    for (const e2 of offsets) {
       const extra = EXTRA_OFFSET_COST * (e1 + e2 - 2 * END_OFFSET)
       const most = Math.min(3 * spread + 60, (best?.cost ?? Number.POSITIVE_INFINITY) - extra)
       if (most < LEAST_HEIGHT) continue
@@ -143,6 +145,20 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
     }
   // Notes too wild for any slur within reach: the highest of them decides.
   return best?.curve ?? curveOf(first, last, side, MOST_END_OFFSET, MOST_END_OFFSET, 3 * spread + 60)
+}
+
+/**
+ * Offsets to try at either end, px off the note: 8 to 30 in steps of two, then in wider steps up to where the end
+ * stands above the furthest note. A long run may climb steeply beside its first or last note; without lifting that
+ * end the slur would have to rise like an arch.
+ */
+function endOffsets(spread: number): readonly number[] {
+  const near = Array.from(
+    { length: (MOST_END_OFFSET - END_OFFSET) / 2 + 1 },
+    (_, step) => END_OFFSET + 2 * step,
+  )
+  const beyond = Math.max(0, Math.ceil((spread + END_OFFSET - MOST_END_OFFSET) / WIDE_STEP))
+  return [...near, ...Array.from({ length: beyond }, (_, step) => MOST_END_OFFSET + WIDE_STEP * (step + 1))]
 }
 
 /** The outline of a slur that is thin at its ends and thicker in the middle; filled and stroked with 0.7 px. */
