@@ -3,7 +3,7 @@ import { isWorksMissing } from '@/lib/services/works-missing'
 import { demoPeople } from './equipment'
 import { demoPassword, foundDemoWorks } from './found-works'
 import { measureLot } from './measure-lots'
-import { demoSchedule } from './schedule'
+import { type DemoSchedule, demoSchedule, WIDE_DIE } from './schedule'
 import { decideAsQualityWould } from './tell-story'
 
 const DAY = 86_400_000
@@ -12,6 +12,10 @@ const DAY = 86_400_000
 const UNDECIDED = 6
 const HALF_MEASURED = 2
 const UNTOUCHED = 1
+
+/** Lots off the new die wait for somebody to look at it, too. */
+const waitsForDie = (lot: DemoSchedule): boolean =>
+  lot.dieCode === WIDE_DIE.code && lot.index >= WIDE_DIE.from + 6
 
 /**
  * Fills an empty works with the demo: readings only; results, summaries and signals come through the services,
@@ -28,7 +32,7 @@ export async function loadDemoWorks(tell: (line: string) => void): Promise<'load
     const left = lots.length - 1 - index
     const specimens = left < UNTOUCHED ? 0 : left < HALF_MEASURED ? 2 : 5
     await measureLot(actors[lot.maker], lot, specimens)
-    if (left >= UNDECIDED) await decideAsQualityWould(actors.orrin, lot)
+    if (left >= UNDECIDED && !waitsForDie(lot)) await decideAsQualityWould(actors.orrin, lot)
     if ((index + 1) % 10 === 0 || left === 0) tell(`Measured lot ${lot.code}, ${index + 1} of ${lots.length}`)
   }
   tell('The demo works is loaded')

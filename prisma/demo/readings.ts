@@ -6,7 +6,7 @@ import { demoRig, demoWeights, demoWorks } from './equipment'
 import { type Bench, perfectReadings, type TrueString } from './perfect-readings'
 import type { DemoProduct } from './products'
 import { type Random, seededRandom } from './random'
-import { type DemoSchedule, inZeroWeek, WORN_DIE, ZERO_WEEK } from './schedule'
+import { type DemoSchedule, inZeroWeek, WIDE_DIE, WORN_DIE, ZERO_WEEK } from './schedule'
 
 /** What is true of a lot; nobody at the works can see it. */
 interface TrueLot {
@@ -29,9 +29,10 @@ const hangingMass = demoWeights
 
 /** Between lots: 0.6 µm in diameter, 0.1 % in density, 0.07 % in the pull, 0.4 µm in the micrometer's zero. */
 function trueLot(product: DemoProduct, lot: DemoSchedule, random: Random): TrueLot {
-  const age = lot.dieCode === WORN_DIE.code ? lot.index - WORN_DIE.from + 1 : 0
+  const worn = lot.dieCode === WORN_DIE.code ? (lot.index - WORN_DIE.from + 1) * WORN_DIE.perLot : 0
+  const wide = lot.dieCode === WIDE_DIE.code ? WIDE_DIE.wider : 0
   return {
-    diameter: product.specification.diameter.target + 0.6e-6 * random.normal(2.5) + age * WORN_DIE.perLot,
+    diameter: product.specification.diameter.target + 0.6e-6 * random.normal(2.5) + worn + wide,
     taper: (0.5 + 0.3 * random.uniform()) * 1e-6,
     density: 7850 * (1 + 0.001 * random.normal(2)),
     ovality: 0.6e-6 * random.uniform(),

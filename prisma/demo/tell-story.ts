@@ -3,6 +3,7 @@ import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
 import { answerSignal } from '@/lib/services/answer-signal'
 import { decideLot } from '@/lib/services/decide-lot'
 import { freezeLimits } from '@/lib/services/freeze-limits'
+import { getDrift } from '@/lib/services/get-drift'
 import { getLot } from '@/lib/services/get-lot'
 import type { SignalView } from '@/lib/services/signal-views'
 import { type DemoSchedule, inZeroWeek, WORN_DIE } from './schedule'
@@ -36,7 +37,16 @@ async function freezeFirstLimits(quality: Actor, lot: DemoSchedule, at: number):
       },
       at,
     )
+  // Signals among the baseline's own lots are looked into before the first lot is judged by the limits.
+  const { signals } = await getDrift(quality, lot.productCode, charts)
+  for (const signal of signals.filter((one) => one.state === 'open'))
+    await answerSignal(quality, signal.id, { ...noCause, version: signal.version }, at)
 }
+
+const noCause = {
+  cause: 'none found',
+  answer: 'Looked at with the lots around it: no cause found, kept under watch.',
+} as const
 
 /** What quality found behind a signal, as it would be written down that day. */
 function answerOf(
@@ -56,10 +66,7 @@ function answerOf(
       answer:
         'Diameter and mass climb together, density holds. Drawn on under watch; the next die is ordered.',
     }
-  return {
-    cause: 'none found',
-    answer: 'Looked at with the lots around it: no cause found, kept under watch.',
-  }
+  return noCause
 }
 
 /**

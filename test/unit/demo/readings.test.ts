@@ -6,7 +6,7 @@ import { localGravity, NORMAL_GRAVITY_RELATIVE_U } from '@/lib/domain/strings/no
 import { demoGauges, demoRig, demoWeights, demoWorks } from '@/prisma/demo/equipment'
 import { type DemoProduct, demoProducts } from '@/prisma/demo/products'
 import { readLot } from '@/prisma/demo/readings'
-import { demoSchedule, inZeroWeek, WORN_DIE } from '@/prisma/demo/schedule'
+import { demoSchedule, inZeroWeek, WIDE_DIE, WORN_DIE } from '@/prisma/demo/schedule'
 import { steelContext } from '@/test/support/steel-context'
 
 const gauge = (code: string) => {
@@ -95,9 +95,22 @@ describe('demo works', () => {
     expect(Math.abs(mass(WORN_DIE.from + WORN_DIE.lots, 160) / start - 1)).toBeLessThan(0.006)
   })
 
+  it('runs nine lots above the mean of those before in diameter and in mass, with the new die of Larch 279', () => {
+    const of279 = lots.filter(({ lot }) => lot.micrometres === WIDE_DIE.micrometres)
+    for (const id of ['diameter', 'massPerMetreWeighed'] as const) {
+      const before = average(of279.slice(0, 25).map(({ mean }) => mean(id)))
+      const since = of279.slice(WIDE_DIE.from, 59).map(({ mean }) => mean(id))
+      expect(since).toHaveLength(9)
+      expect(average(since) / before - 1).toBeGreaterThan(0.002)
+    }
+  })
+
   it('shows the micrometer zero week in the density of every product, and not in its mass', () => {
     for (const product of demoProducts) {
-      const own = lots.filter((one) => one.product === product && one.lot.dieCode !== WORN_DIE.code)
+      const own = lots.filter(
+        (one) =>
+          one.product === product && one.lot.dieCode !== WORN_DIE.code && one.lot.dieCode !== WIDE_DIE.code,
+      )
       const during = own.filter(({ lot }) => inZeroWeek(lot.day))
       const before = own.filter(({ lot }) => !inZeroWeek(lot.day))
       expect(during.length).toBeGreaterThan(0)
