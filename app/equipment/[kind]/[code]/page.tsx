@@ -1,0 +1,95 @@
+import type { Metadata } from 'next'
+import Link from 'next/link'
+import { notFound } from 'next/navigation'
+import type { ReactNode } from 'react'
+import { roomPage } from '@/app/_page'
+import { ActionForm } from '@/app/_ui/forms/ActionForm'
+import { Submit } from '@/app/_ui/forms/Submit'
+import { PageHead } from '@/app/_ui/shell/PageHead'
+import type { Actor } from '@/lib/access/actor'
+import { may } from '@/lib/access/permit'
+import { gaugeKinds } from '@/lib/input/equipment'
+import { getWorks, type WorksFacts } from '@/lib/services/get-works'
+import { requireDie } from '@/lib/services/keep-die'
+import { requireGauge } from '@/lib/services/keep-gauge'
+import { requireMachine } from '@/lib/services/keep-machine'
+import { requireWeight } from '@/lib/services/keep-weight'
+import { DieFields, GaugeFields, MachineFields, WeightFields } from '../../_ui/EquipmentForms'
+import { type EquipmentKind, equipmentKindOf, kindWords } from '../../_ui/kinds'
+import { PutAway } from '../../_ui/PutAway'
+import { updateEquipmentAction } from '../../actions'
+
+export const metadata: Metadata = { title: 'Equipment' }
+
+interface Found {
+  readonly row: {
+    readonly code: string
+    readonly version: number
+    readonly active: boolean
+    readonly name?: string
+  }
+  readonly fields: ReactNode
+}
+
+const find = async (kind: EquipmentKind, code: string, actor: Actor, works: WorksFacts): Promise<Found> => {
+  switch (kind) {
+    case 'gauges': {
+      const row = await requireGauge(actor, code)
+      const gaugeKind = gaugeKinds.find((one) => one === row.kind) ?? 'micrometer'
+      return { row, fields: <GaugeFields works={works} row={row} kind={gaugeKind} /> }
+    }
+    case 'weights': {
+      const row = await requireWeight(actor, code)
+      return { row, fields: <WeightFields works={works} row={row} /> }
+    }
+    case 'machines': {
+      const row = await requireMachine(actor, code)
+      return { row, fields: <MachineFields works={works} row={row} /> }
+    }
+    case 'dies': {
+      const row = await requireDie(actor, code)
+      return { row, fields: <DieFields works={works} row={row} /> }
+    }
+  }
+}
+
+export default roomPage(async (actor, { params }) => {
+  const kind = equipmentKindOf(params.kind)
+  if (kind === undefined) notFound()
+  const works = await getWorks(actor)
+  const { row, fields } = await find(kind, params.code ?? '', actor, works)
+  const keeps = may(actor, 'equipment.keep')
+  return (
+    <>
+      <PageHead
+        over={<Link href="/equipment">Equipment</Link>}
+        title={
+          row.name ? (
+            <>
+              {row.name} <span>{row.code}</span>
+            </>
+          ) : (
+            row.code
+          )
+        }
+        under={row.active ? kindWords[kind].one : `${kindWords[kind].one}, put away`}
+        actions={
+          keeps ? (
+            <PutAway kind={kind} code={row.code} version={row.version} active={row.active} />
+          ) : undefined
+        }
+      />
+      <ActionForm action={updateEquipmentAction.bind(null, kind, row.code)} label={row.code}>
+        <fieldset disabled={!keeps}>{fields}</fieldset>
+        {keeps ? (
+          <div className="actions">
+            <Submit>Save {row.code}</Submit>
+            <span className="small">Results already computed keep what they rest on.</span>
+          </div>
+        ) : (
+          <p className="small">Quality keeps the equipment list.</p>
+        )}
+      </ActionForm>
+    </>
+  )
+})
