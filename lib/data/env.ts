@@ -36,6 +36,13 @@ const readable = (path: string): boolean => {
   }
 }
 
+/** A server (a host, or the folder of a socket) and a database on it. */
+const namesDatabase = (url: string): boolean => {
+  if (!URL.canParse(url)) return false
+  const { hostname, pathname, searchParams } = new URL(url)
+  return (hostname !== '' || Boolean(searchParams.get('host'))) && pathname.length > 1
+}
+
 /** An empty variable counts as not set: that is how a line of an environment file is switched off. */
 const optional = <Schema extends z.ZodType<unknown, string>>(schema: Schema) =>
   z.preprocess((value) => (value === '' ? undefined : value), schema.optional())
@@ -57,7 +64,7 @@ const variables = z.object({
         error: 'starts neither with file: nor with postgresql://',
         abort: true,
       })
-      .refine((url) => url.startsWith('file:') || URL.canParse(url), 'is not a complete address')
+      .refine((url) => url.startsWith('file:') || namesDatabase(url), 'is not a complete address')
       .refine((url) => !url.startsWith('file:') || !/[?#]/.test(url), 'has options after the path'),
   ),
   TLS_CERT: optional(z.string().refine(readable, 'names a file that can’t be read')),
