@@ -32,7 +32,7 @@ export const backupName = (at: Date): string =>
 
 /**
  * Copies the database as it is at one moment, checks the copy, and writes its note beside it. The server may go
- * on writing: the copy is taken page by page and begins again by itself where it was overtaken.
+ * on writing.
  * @param path the database file
  * @param folder where the back-up goes; made when it is missing
  * @throws LedgerlineError when there is no database, or the copy does not pass its check; nothing is left then
@@ -43,13 +43,8 @@ export const backUp = async (path: string, folder: string, at: Date): Promise<Ba
   const target = join(folder, backupName(at))
   if (existsSync(target)) throw problem('conflict', `${basename(target)} exists already.`)
   const part = `${target}.part`
-  const connection = openSqlite(path)
   try {
-    await connection.backup(part)
-  } finally {
-    connection.close()
-  }
-  try {
+    await copyWhole(path, part)
     const faults = await soundnessOfFile(part)
     if (faults !== undefined) throw problem('storage', `The back-up was not kept: ${faults}`)
     const { ledger, migrations } = contentOfFile(part)
@@ -70,6 +65,21 @@ export const backUp = async (path: string, folder: string, at: Date): Promise<Ba
   } catch (error) {
     removeDatabaseFiles(part)
     rmSync(noteOf(target), { force: true })
+    if (String((error as { code?: unknown }).code).startsWith('SQLITE_'))
+      throw problem('storage', `The back-up was not kept: it can’t be read (${(error as Error).message}).`)
     throw error
+  }
+}
+
+/**
+ * All pages in one step. In steps of some pages each, SQLite begins anew whenever somebody has written in between:
+ * beside a busy server that never ends. Readers and writers go on meanwhile (WAL).
+ */
+const copyWhole = async (path: string, target: string): Promise<void> => {
+  const connection = openSqlite(path)
+  try {
+    await connection.backup(target, { progress: () => Number.MAX_SAFE_INTEGER })
+  } finally {
+    connection.close()
   }
 }

@@ -39,12 +39,14 @@ export const restore = async (
   const incoming = `${path}.incoming`
   removeDatabaseFiles(incoming)
   copyExactly(backup, incoming)
-  const kept = existsSync(path) ? setAside(path, at) : undefined
+  let kept: string | undefined
   try {
+    kept = existsSync(path) ? setAside(path, at) : undefined
     renameSync(incoming, path)
     flushToDisk(dirname(path))
   } catch (error) {
     if (kept !== undefined) renameSync(kept, path)
+    removeDatabaseFiles(incoming)
     throw error
   }
   return { ledger, kept }
