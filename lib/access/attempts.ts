@@ -1,4 +1,5 @@
 import { database } from '@/lib/data/database'
+import { lockSignIn } from '@/lib/data/locks'
 import { deleteAttempts, forgetAttempts, getAttempts, putAttempt } from '@/lib/data/sign-in-attempts'
 import { problem } from '@/lib/domain/errors'
 import { attemptKeys, countTry, type SlowingKind, slowingRules, waitFor, window_ms } from './slowing'
@@ -12,6 +13,7 @@ const kinds = Object.keys(slowingRules) as SlowingKind[]
 export const beginAttempt = (account: string, address: string, now: number): Promise<void> => {
   const keys = attemptKeys(account, address)
   return database().write(async (tx) => {
+    await lockSignIn(tx)
     await forgetAttempts(tx, now - window_ms, now)
     const rows = new Map((await getAttempts(tx, Object.values(keys))).map((row) => [row.key, row]))
     const wait = Math.max(...kinds.map((kind) => waitFor(rows.get(keys[kind]), now)))
@@ -32,6 +34,7 @@ export const beginAttempt = (account: string, address: string, now: number): Pro
 export const forgetFailures = (account: string, address: string): Promise<void> => {
   const keys = attemptKeys(account, address)
   return database().write(async (tx) => {
+    await lockSignIn(tx)
     await deleteAttempts(tx, [keys.pair])
     for (const row of await getAttempts(tx, [keys.address, keys.account])) {
       await putAttempt(tx, { ...row, failures: Math.max(0, row.failures - 1), blockedUntil: undefined })

@@ -28,3 +28,12 @@ export const lockRow = async (tx: Tx, table: LockableTable, id: number): Promise
 
 /** The first statement of every transaction that changes a lot or anything that hangs on it. */
 export const lockLot = (tx: Tx, lotId: number): Promise<void> => lockRow(tx, 'Lot', lotId)
+
+/** Any number that no other advisory lock of this database uses. */
+const SIGN_IN_LOCK = 5_127_004
+
+/** Tries to sign in are counted one after the other: their counters may not be there yet, so there is no row to lock. */
+export const lockSignIn = async (tx: Tx): Promise<void> => {
+  if (engineOf(tx) === 'sqlite') return
+  await tx.$queryRawUnsafe('select pg_advisory_xact_lock($1::bigint)::text', SIGN_IN_LOCK)
+}
