@@ -5,7 +5,7 @@ interface Rule {
   readonly weights: readonly number[]
 }
 
-/** Nodes and weights on −1 … 1, by Newton's method on the Legendre polynomial. */
+/** Nodes and weights on −1 … 1, by Newton's method on the Legendre polynomial. Source: DLMF 3.5(v). */
 export function gaussLegendre(n: number): Rule {
   const nodes: number[] = []
   const weights: number[] = []

@@ -5,7 +5,7 @@ import { integrate } from './gauss-legendre'
 const DEPTH = 45
 const GOLDEN = (Math.sqrt(5) - 1) / 2
 
-/** Place of the maximum of a function of one peak on 0 … ∞. */
+/** Place of the maximum of a function of one peak on 0 … ∞. Source: derived (concave g has one peak). */
 function peakOf(g: (x: number) => number): number {
   let low = 0
   let high = 1

@@ -1,6 +1,6 @@
 import { ln } from '../units/elementary'
 
-/** Σ s^(2k+1)/(2k+1) from k = 1, over s: the part of artanh s beyond s itself, divided by s. */
+/** Σ s^(2k+1)/(2k+1) from k = 1, over s: the part of artanh s beyond s itself, divided by s. Source: DLMF 4.6 (series of ln((1 + s)/(1 − s))). */
 function artanhRest(s: number): number {
   const z = s * s
   let rest = 0

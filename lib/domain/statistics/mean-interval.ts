@@ -4,7 +4,7 @@ import type { Summary } from './summary'
 
 export type Interval = readonly [lower: number, upper: number]
 
-/** Two-sided interval for the mean of normal values, x̄ ± t·s/√n. Undefined for fewer than two values. */
+/** Two-sided interval for the mean of normal values, x̄ ± t·s/√n. Undefined for fewer than two values. Source: NIST/SEMATECH e-Handbook 1.3.5.2. */
 export function meanInterval({ m2, mean, n }: Summary, confidence: number): Interval | undefined {
   if (n < 2) return undefined
   const half = tQuantile((1 + confidence) / 2, n - 1) * Math.sqrt(m2 / (n - 1) / n)

@@ -2,7 +2,7 @@ import { ln } from '../units/elementary'
 import { findRoot } from './find-root'
 import type { Tails } from './tails'
 
-/** A probability and the tail that has it. */
+/** A probability and the tail that has it. Source: definition. */
 export interface WantedTail {
   readonly tail: keyof Tails
   readonly probability: number

@@ -1,6 +1,6 @@
 import { mean } from './mean'
 
-/** Central moments m2, m3, m4 with divisor n. */
+/** Central moments m2, m3, m4 with divisor n. Source: NIST/SEMATECH e-Handbook 1.3.5.11. */
 function centralMoments(values: readonly number[]): { m2: number; m3: number; m4: number } | undefined {
   const middle = mean(values)
   if (middle === undefined) return undefined
