@@ -1,10 +1,11 @@
-import { createRequire } from 'node:module'
-import { dirname, join } from 'node:path'
+import { join } from 'node:path'
 
-// Built from pieces at run time, so that no bundler takes the font files for modules.
-const require = createRequire(import.meta.url)
-
-const folderOf = (name: string): string => dirname(require.resolve(`@expo-google-fonts/${name}/package.json`))
+/**
+ * Fonts are read from the installed packages below the folder that the server runs in: a path asked of the module
+ * system would be turned into a name inside the bundle.
+ */
+const folderOf = (name: string): string =>
+  join(/* turbopackIgnore: true */ process.cwd(), 'node_modules/@expo-google-fonts', name)
 
 const face = (name: string, folder: string, file: string): string =>
   join(folderOf(name), folder, `${file}.ttf`)

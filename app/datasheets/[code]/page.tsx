@@ -4,6 +4,7 @@ import { may } from '@/lib/access/permit'
 import { getDatasheet } from '@/lib/services/get-datasheet'
 import { getWorks } from '@/lib/services/get-works'
 import { PublishedDatasheet } from '../_ui/PublishedDatasheet'
+import '@/app/_ui/charts/charts.css'
 import '../datasheets.css'
 
 export const metadata: Metadata = { title: 'Datasheet' }

@@ -1,9 +1,21 @@
+import { LotMarks } from '@/app/_ui/charts/LotMarks'
+import { TensionCurves } from '@/app/_ui/charts/TensionCurves'
 import { formatDate } from '@/app/_ui/format/dates'
 import { Cautions } from '@/app/_ui/shell/Cautions'
-import type { DatasheetBody, DatasheetCell, WorkingState } from '@/lib/domain/datasheets/datasheet'
-import { basisSentences } from '@/lib/domain/datasheets/tension-by-basis'
-import { WORKING_BOUNDS } from '@/lib/domain/datasheets/working-state'
-import { formatNumber, formatQuantity } from '@/lib/domain/units/format'
+import { datasheetCurves, datasheetLots } from '@/lib/domain/charts/datasheet-charts'
+import type { DatasheetBody, DatasheetCell } from '@/lib/domain/datasheets/datasheet'
+import {
+  cellInWords,
+  figuresInWords,
+  forceUnitNames,
+  lawInWords,
+  lengthInWords,
+  methodInWords,
+  stiffnessInWords,
+  tableInWords,
+  workingStateWords,
+} from '@/lib/domain/datasheets/datasheet-words'
+import { formatNumber } from '@/lib/domain/units/format'
 
 interface Props {
   readonly body: DatasheetBody
@@ -25,81 +37,11 @@ interface Props {
   }
 }
 
-const unitNames: Readonly<Record<DatasheetBody['forceUnit'], string>> = {
-  N: 'newtons',
-  kgf: 'kilograms-force',
-  lbf: 'pounds-force',
-}
-
-const stateWords: Readonly<Record<WorkingState, string>> = {
-  slack: `below ${WORKING_BOUNDS.slack}, slack`,
-  working: `${WORKING_BOUNDS.slack} to ${WORKING_BOUNDS.working}, working`,
-  upper: `${WORKING_BOUNDS.working} to ${WORKING_BOUNDS.upper}, only if the maker of the instrument agrees`,
-  over: `above ${WORKING_BOUNDS.upper}, not offered`,
-}
-
 /** A datasheet as it is printed: white paper and ink in either theme. */
 export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
-  const { massPerMetre, diameter, effectiveDensity, reference } = body
-  const number = (value: number, decimals: number): string => formatNumber(value, { decimals, decimal })
-  const figures: readonly { name: string; value: string; note?: string }[] = [
-    {
-      name: 'Mass per metre',
-      value: formatQuantity(massPerMetre.value, 'mg/m', { decimals: 1, decimal, withUnit: true }),
-      note:
-        massPerMetre.expanded === undefined
-          ? undefined
-          : `± ${formatQuantity(massPerMetre.expanded, 'mg/m', { decimals: 1, decimal })} (k = 2)`,
-    },
-    {
-      name: 'Diameter',
-      value: formatQuantity(diameter.value, 'mm', { decimals: 4, decimal, withUnit: true }),
-      note:
-        diameter.expanded === undefined
-          ? 'by the specification'
-          : `± ${formatQuantity(diameter.expanded, 'mm', { decimals: 4, decimal })} (k = 2)`,
-    },
-    {
-      name: 'Effective density',
-      value: formatQuantity(effectiveDensity.value, 'kg/m³', { decimals: 0, decimal, withUnit: true }),
-      note: 'of the measured circle',
-    },
-    {
-      name: 'Breaking load',
-      value: body.breakingLoad
-        ? formatQuantity(body.breakingLoad.value, body.forceUnit, { decimals: 0, decimal, withUnit: true })
-        : '–',
-      note: body.breakingLoad ? 'least, by the material’s table' : 'not known',
-    },
-    {
-      name: `${reference.note} on ${number(reference.length * 1000, 0)} mm`,
-      value: formatQuantity(reference.tension, body.forceUnit, {
-        decimals: body.decimals,
-        decimal,
-        withUnit: true,
-      }),
-      note: `${number(reference.frequency, 2)} Hz`,
-    },
-    {
-      name: 'Wave speed',
-      value: `${number(reference.waveSpeed, 1)} m/s`,
-      note: `at ${reference.note}`,
-    },
-    {
-      name: 'One semitone up',
-      value: `+${number(reference.semitoneRatio * 100, 1)} %`,
-      note: 'tension',
-    },
-    {
-      name: 'One cent',
-      value: formatQuantity(reference.newtonsPerCent, body.forceUnit, {
-        decimals: 2,
-        decimal,
-        withUnit: true,
-      }),
-      note: `at ${reference.note}`,
-    },
-  ]
+  const states = workingStateWords(decimal)
+  const { law, values } = lawInWords(body, decimal)
+  const curves = datasheetCurves(body, decimal)
   return (
     <article className="datasheet-paper">
       <header>
@@ -133,7 +75,7 @@ export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
       <section aria-labelledby="datasheet-figures">
         <h2 id="datasheet-figures">In figures</h2>
         <dl className="datasheet-figures">
-          {figures.map(({ name, note, value }) => (
+          {figuresInWords(body, decimal).map(({ name, note, value }) => (
             <div key={name}>
               <dt>{name}</dt>
               <dd>
@@ -147,11 +89,7 @@ export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
 
       <section aria-labelledby="datasheet-table">
         <h2 id="datasheet-table">
-          Tension in {unitNames[body.forceUnit]}{' '}
-          <small>
-            with the share of the least breaking load beside it. A4 = {number(body.a4, 0)} Hz, equal
-            temperament, 20 °C
-          </small>
+          Tension in {forceUnitNames[body.forceUnit]} <small>{tableInWords(body, decimal)}</small>
         </h2>
         {/* biome-ignore lint/a11y/noNoninteractiveTabindex: a table that scrolls sideways has to be reachable by keyboard */}
         <section className="table-frame" tabIndex={0} aria-label="Tension table">
@@ -162,7 +100,7 @@ export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
                 <th scope="col">Hz</th>
                 {body.lengths.map((length) => (
                   <th scope="col" key={length}>
-                    {number(length * 1000, length * 1000 === Math.round(length * 1000) ? 0 : 1)} mm
+                    {lengthInWords(length, decimal)}
                   </th>
                 ))}
               </tr>
@@ -171,7 +109,7 @@ export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
               {body.rows.map((row) => (
                 <tr key={row.midi}>
                   <th scope="row">{row.note}</th>
-                  <td>{number(row.frequency, 2)}</td>
+                  <td>{formatNumber(row.frequency, { decimals: 2, decimal })}</td>
                   {row.cells.map((cell, index) => (
                     <TensionCell key={body.lengths[index]} cell={cell} body={body} decimal={decimal} />
                   ))}
@@ -183,33 +121,34 @@ export function DatasheetPaper({ body, decimal, timeZone, published }: Props) {
         <ul className="datasheet-legend">
           {(['slack', 'working', 'upper', 'over'] as const).map((state) => (
             <li key={state}>
-              <span className={`datasheet-swatch ${state}`} aria-hidden="true" /> {stateWords[state]}
+              <span className={`datasheet-swatch ${state}`} aria-hidden="true" /> {states[state]}
             </li>
           ))}
         </ul>
       </section>
 
       <div className="datasheet-two">
-        <section aria-labelledby="datasheet-made">
-          <h2 id="datasheet-made">What the works really makes</h2>
-          <p>Mass per metre of the released lots. {body.spread.statement}</p>
-        </section>
-        <section aria-labelledby="datasheet-method">
-          <h2 id="datasheet-method">How it was found</h2>
-          <p>{body.method.replace(` ${basisSentences[body.basis]}`, '')}</p>
-          <p>
-            <b>{basisSentences[body.basis]}</b>{' '}
-            {body.basis === 'unloaded-mass'
-              ? `EA = ${formatQuantity(body.axialStiffness, 'N', { decimals: 0, decimal, withUnit: true })}.`
-              : body.basis === 'loaded-mass'
-                ? `µ_loaded = ${formatQuantity(body.loadedMassPerMetre, 'mg/m', { decimals: 2, decimal, withUnit: true })}.`
-                : null}
-          </p>
-          <p>
-            Stiffness is not in the table; at {reference.note} it adds less than a tenth of a cent to a thin
-            string.
-          </p>
-        </section>
+        {curves ? (
+          <section aria-labelledby="datasheet-curves">
+            <h2 id="datasheet-curves">Tension against pitch</h2>
+            <TensionCurves {...curves} />
+          </section>
+        ) : null}
+        <div>
+          <section aria-labelledby="datasheet-made">
+            <h2 id="datasheet-made">What the works really makes</h2>
+            <LotMarks {...datasheetLots(body, decimal)} />
+            <p>Mass per metre of the released lots, one mark a lot. {body.spread.statement}</p>
+          </section>
+          <section aria-labelledby="datasheet-method">
+            <h2 id="datasheet-method">How it was found</h2>
+            <p>{methodInWords(body)}</p>
+            <p>
+              <b>{law}</b> {values}
+            </p>
+            <p>{stiffnessInWords(body, decimal)}</p>
+          </section>
+        </div>
       </div>
 
       <Cautions title="A string under tension can hurt." sentences={body.cautions} />
@@ -257,16 +196,11 @@ function TensionCell({
   readonly body: DatasheetBody
   readonly decimal: 'point' | 'comma'
 }) {
+  const { share, tension } = cellInWords(cell, body, decimal)
   return (
     <td className={`datasheet-cell ${cell.state}`}>
-      <span className="tension">
-        {cell.state === 'over'
-          ? 'over'
-          : formatQuantity(cell.tension, body.forceUnit, { decimals: body.decimals, decimal })}
-      </span>
-      <span className="share">
-        {cell.fraction === undefined ? '' : formatNumber(cell.fraction, { decimals: 2, decimal })}
-      </span>
+      <span className="tension">{tension}</span>
+      <span className="share">{share}</span>
     </td>
   )
 }

@@ -1,4 +1,5 @@
 import Link from 'next/link'
+import type { ReactNode } from 'react'
 import { formatDateTime } from '@/app/_ui/format/dates'
 import { Notice } from '@/app/_ui/shell/Notice'
 import type { DatasheetView } from '@/lib/services/get-datasheet'
@@ -11,6 +12,19 @@ interface Props {
   /** Whether the reader may open the lots. */
   readonly mayOpenLots: boolean
 }
+
+/** More lots than this stand behind a fold. */
+const MANY_LOTS = 24
+
+const LotList = ({ children, folded }: { readonly children: ReactNode; readonly folded: boolean }) =>
+  folded ? (
+    <details>
+      <summary>Which ones</summary>
+      <p>{children}</p>
+    </details>
+  ) : (
+    <p>{children}</p>
+  )
 
 /** A published revision on its paper, with the ways to take it along beside it. */
 export function PublishedDatasheet({ view, decimal, timeZone, mayOpenLots }: Props) {
@@ -66,9 +80,9 @@ export function PublishedDatasheet({ view, decimal, timeZone, mayOpenLots }: Pro
           <h2>
             Stands on <small>{view.body.spread.lots} lots</small>
           </h2>
-          <p>
+          <LotList folded={view.body.lots.length > MANY_LOTS}>
             {view.body.lots.map((lot, index) => (
-              <span key={lot.code}>
+              <span key={lot.code} className="nowrap">
                 {index > 0 ? ', ' : ''}
                 {mayOpenLots ? (
                   <Link href={`/lots/${encodeURIComponent(lot.code)}`}>{lot.code}</Link>
@@ -77,7 +91,7 @@ export function PublishedDatasheet({ view, decimal, timeZone, mayOpenLots }: Pro
                 )}
               </span>
             ))}
-          </p>
+          </LotList>
         </section>
         <section className="section">
           <h2>Revisions</h2>

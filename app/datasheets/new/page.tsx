@@ -13,6 +13,7 @@ import { getWorks } from '@/lib/services/get-works'
 import { listProducts } from '@/lib/services/list-products'
 import { DatasheetPaper } from '../_ui/DatasheetPaper'
 import { publishDatasheetAction } from '../actions'
+import '@/app/_ui/charts/charts.css'
 import '../datasheets.css'
 
 export const metadata: Metadata = { title: 'Build a datasheet' }

@@ -5,6 +5,7 @@ import { problem } from '@/lib/domain/errors'
 import { getDatasheet } from '@/lib/services/get-datasheet'
 import { getWorks } from '@/lib/services/get-works'
 import { PublishedDatasheet } from '../../_ui/PublishedDatasheet'
+import '@/app/_ui/charts/charts.css'
 import '../../datasheets.css'
 
 export const metadata: Metadata = { title: 'Datasheet revision' }
