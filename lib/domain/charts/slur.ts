@@ -43,24 +43,32 @@ export const slurPoint = (curve: SlurCurve, t: number, inset = 0): Point => [
   ),
 ]
 
-/** Signed distance from a point to the nearest of the points `near`; negative on the outer side of the slur. */
-function signedDistance(near: readonly Point[], [x, y]: Point, side: -1 | 1): number {
-  let nearest = Number.POSITIVE_INFINITY
-  let sign = 1
-  for (const [cx, cy] of near) {
-    const distance = Math.hypot(cx - x, cy - y)
-    if (distance >= nearest) continue
-    nearest = distance
-    sign = (cy - y) * side < 0 ? -1 : 1
-  }
-  return sign * nearest
+/** Distance from the origin to the line from a to b. */
+function distanceToLine(ax: number, ay: number, bx: number, by: number): number {
+  const [dx, dy] = [bx - ax, by - ay]
+  const length = dx * dx + dy * dy
+  const along = length === 0 ? 0 : Math.min(1, Math.max(0, -(ax * dx + ay * dy) / length))
+  const [x, y] = [ax + along * dx, ay + along * dy]
+  return Math.sqrt(x * x + y * y)
 }
 
 /** How near the inner edge of a slur comes to a point, px; negative when the point lies on its outer side. */
-export function slurClearance(curve: SlurCurve, point: Point): number {
+export function slurClearance(curve: SlurCurve, [x, y]: Point): number {
   const steps = Math.max(64, Math.ceil(curve.end[0] - curve.start[0]))
-  const edge = Array.from({ length: steps + 1 }, (_, step) => slurPoint(curve, step / steps, TAPER))
-  return signedDistance(edge, point, curve.side)
+  let nearest = Number.POSITIVE_INFINITY
+  let sign = 1
+  let [ax, ay] = slurPoint(curve, 0, TAPER)
+  for (let step = 1; step <= steps; step += 1) {
+    const [bx, by] = slurPoint(curve, step / steps, TAPER)
+    const distance = distanceToLine(ax - x, ay - y, bx - x, by - y)
+    if (distance < nearest) {
+      nearest = distance
+      sign = ((ay + by) / 2 - y) * curve.side < 0 ? -1 : 1
+    }
+    ax = bx
+    ay = by
+  }
+  return sign * nearest
 }
 
 /** The curve over a base line that leans from end to end, its handles raised by `height`. */
@@ -79,34 +87,84 @@ function curveOf(first: Point, last: Point, side: -1 | 1, e1: number, e2: number
   }
 }
 
-/** A note and the parameters at which a slur passes over it: only these need looking at. */
+/**
+ * The inner edge near one note, sampled: x and outward height relative to the note, the height split into what
+ * each end offset and the slur's height add to it. x does not depend on any of them, so all is known beforehand.
+ */
 interface Neighbour {
-  readonly note: Point
-  readonly at: readonly number[]
+  readonly x: Float64Array
+  readonly fixed: Float64Array
+  readonly perFirst: Float64Array
+  readonly perLast: Float64Array
+  readonly perHeight: Float64Array
 }
 
-function neighboursOf(notes: readonly Point[], flat: SlurCurve): Neighbour[] {
-  const steps = Math.max(48, Math.ceil((flat.end[0] - flat.start[0]) / 2))
-  const all = Array.from({ length: steps + 1 }, (_, step) => step / steps)
-  const placed = all.map((t) => [t, slurPoint(flat, t)[0]] as const)
-  return notes.map((note) => ({
-    note,
-    at: placed.filter(([, x]) => Math.abs(x - note[0]) <= CLEAR + 4).map(([t]) => t),
+/** Outward height of the inner edge over its level ends, for one parameter. */
+function shares(t: number, lean: number): readonly [number, number, number] {
+  const s = 1 - t
+  const [b0, b1, b2, b3] = [s * s * s, 3 * s * s * t, 3 * s * t * t, t * t * t]
+  return [b0 + b1 * (1 - lean) + b2 * lean, b1 * lean + b2 * (1 - lean) + b3, b1 + b2]
+}
+
+function neighboursOf(notes: readonly Point[], first: Point, last: Point, side: -1 | 1): Neighbour[] {
+  const width = last[0] - first[0]
+  const lean = handleLength(width) / width
+  const flat = curveOf(first, last, side, 0, 0, 0)
+  const steps = Math.max(48, Math.ceil(width / 2))
+  const samples = Array.from({ length: steps + 1 }, (_, step) => step / steps).map((t) => ({
+    x: slurPoint(flat, t)[0],
+    parts: shares(t, lean),
   }))
+  return notes.map(([x, y]) => {
+    // One sample further on either side, so that the edge is whole over the stretch that matters.
+    const from = samples.findIndex((sample) => sample.x >= x - CLEAR - 1)
+    const to = samples.findLastIndex((sample) => sample.x <= x + CLEAR + 1)
+    const near = samples.slice(Math.max(0, from - 1), to + 2)
+    return {
+      x: Float64Array.from(near, (sample) => sample.x - x),
+      fixed: Float64Array.from(
+        near,
+        ({ parts: [one, other] }) => side * (first[1] * one + last[1] * other - y),
+      ),
+      perFirst: Float64Array.from(near, ({ parts }) => parts[0]),
+      perLast: Float64Array.from(near, ({ parts }) => parts[1]),
+      perHeight: Float64Array.from(near, ({ parts }) => parts[2]),
+    }
+  })
+}
+
+/** The edge passes outside the note and stays clear of its head. */
+function isClearOf(
+  { x, fixed, perFirst, perLast, perHeight }: Neighbour,
+  e1: number,
+  e2: number,
+  height: number,
+): boolean {
+  const inner = height - TAPER
+  let beforeX = 0
+  let before = 0
+  for (let at = 0; at < x.length; at += 1) {
+    const nowX = x[at] ?? 0
+    const now =
+      (fixed[at] ?? 0) + e1 * (perFirst[at] ?? 0) + e2 * (perLast[at] ?? 0) + inner * (perHeight[at] ?? 0)
+    if (at > 0) {
+      if (distanceToLine(beforeX, before, nowX, now) < CLEAR) return false
+      if (beforeX <= 0 && nowX >= 0 && before + now < 0) return false
+    }
+    beforeX = nowX
+    before = now
+  }
+  return true
 }
 
 /** The smallest height at which every inner note is clear, or undefined when it would not be below `most`. */
-function leastHeight(
-  neighbours: readonly Neighbour[],
-  of: (height: number) => SlurCurve,
-  most: number,
-): number | undefined {
+function leastHeight(neighbours: Neighbour[], e1: number, e2: number, most: number): number | undefined {
   const isClear = (height: number): boolean => {
-    const curve = of(height)
-    return neighbours.every(({ note, at }) => {
-      const near = at.map((t) => slurPoint(curve, t, TAPER))
-      return signedDistance(near, note, curve.side) >= CLEAR
-    })
+    const at = neighbours.findIndex((one) => !isClearOf(one, e1, e2, height))
+    const [hit] = at > 0 ? neighbours.splice(at, 1) : []
+    // The note that was in the way is asked first next time: it will mostly be in the way again.
+    if (hit) neighbours.unshift(hit)
+    return at < 0
   }
   if (isClear(LEAST_HEIGHT)) return LEAST_HEIGHT
   if (!isClear(most)) return undefined
@@ -128,23 +186,26 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
   const first = notes[0]
   const last = notes.at(-1)
   if (!first || !last || notes.length < 2 || !(last[0] > first[0])) return undefined
-  const inner = neighboursOf(notes.slice(1, -1), curveOf(first, last, side, 0, 0, 0))
+  const inner = neighboursOf(notes.slice(1, -1), first, last, side)
   const spread = Math.max(...notes.map(([, y]) => y)) - Math.min(...notes.map(([, y]) => y))
-  let best: { cost: number; curve: SlurCurve } | undefined
+  let best: { cost: number; e1: number; e2: number; height: number } | undefined
   const offsets = endOffsets(spread)
   for (const e1 of offsets)
     for (const e2 of offsets) {
       const extra = EXTRA_OFFSET_COST * (e1 + e2 - 2 * END_OFFSET)
       const most = Math.min(3 * spread + 60, (best?.cost ?? Number.POSITIVE_INFINITY) - extra)
       if (most < LEAST_HEIGHT) continue
-      const of = (height: number) => curveOf(first, last, side, e1, e2, height)
-      const height = leastHeight(inner, of, most)
-      if (height === undefined) continue
-      const cost = height + extra
-      if (best === undefined || cost < best.cost) best = { cost, curve: of(height) }
+      const height = leastHeight(inner, e1, e2, most)
+      if (height !== undefined && (best === undefined || height + extra < best.cost))
+        best = { cost: height + extra, e1, e2, height }
     }
   // Notes too wild for any slur within reach: the highest of them decides.
-  return best?.curve ?? curveOf(first, last, side, MOST_END_OFFSET, MOST_END_OFFSET, 3 * spread + 60)
+  const { e1, e2, height } = best ?? {
+    e1: MOST_END_OFFSET,
+    e2: MOST_END_OFFSET,
+    height: 3 * spread + 60,
+  }
+  return curveOf(first, last, side, e1, e2, height)
 }
 
 /**
@@ -157,7 +218,7 @@ function endOffsets(spread: number): readonly number[] {
     { length: (MOST_END_OFFSET - END_OFFSET) / 2 + 1 },
     (_, step) => END_OFFSET + 2 * step,
   )
-  const beyond = Math.max(0, Math.ceil((spread + END_OFFSET - MOST_END_OFFSET) / WIDE_STEP))
+  const beyond = Math.max(0, Math.ceil((spread + CLEAR + 2 - MOST_END_OFFSET) / WIDE_STEP))
   return [...near, ...Array.from({ length: beyond }, (_, step) => MOST_END_OFFSET + WIDE_STEP * (step + 1))]
 }
 
