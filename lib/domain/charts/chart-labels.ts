@@ -34,7 +34,10 @@ function slurBoxes({ curve }: PlacedSlur, y: number): Box[] {
   })
 }
 
-/** 9 px above the head, or below a head that is below; else beside it. */
+/**
+ * 9 px above the head, or below a head that is below; else beside it. On its inner side only where no neighbour
+ * lies further out: there one could not say whose value it is.
+ */
 function noteWish(
   { note, x, y: down, off }: PlacedNote,
   stave: StaveLayout,
@@ -42,6 +45,10 @@ function noteWish(
 ): Wish<Label> {
   const y = stave.y + down
   const beyondArrow = off ? 4 : 0
+  const outward = note.beyond === 'above' ? -1 : 1
+  const isFurthest = !stave.notes.some(
+    (other) => other.note !== note && Math.abs(other.x - x) < 30 && (other.y - down) * outward >= 0,
+  )
   const above: Spot = { x, y: y - 9 - beyondArrow, anchor: 'middle' }
   const below: Spot = { x, y: y + 17 + beyondArrow, anchor: 'middle' }
   const beside: Spot[] = [
@@ -58,7 +65,11 @@ function noteWish(
     size: 11,
     face: 'strong',
     rank: Math.abs(down),
-    spots: note.beyond === 'above' ? [above, ...beside, below] : [below, ...beside, above],
+    spots: [
+      note.beyond === 'above' ? above : below,
+      ...beside,
+      ...(isFurthest ? [note.beyond === 'above' ? below : above] : []),
+    ],
   }
 }
 
@@ -95,23 +106,27 @@ function runWish({ slur, curve, top, bottom }: PlacedSlur, stave: StaveLayout): 
   }
 }
 
-/** A tolerance's name at the left end of its line, or after the first bar line that leaves it room. */
+/** A tolerance's name at the left end of its line, after a bar line, or at the first free place along the line. */
 function toleranceWishes(stave: StaveLayout, { frame, bars }: StaffLayout): Wish<Label>[] {
+  const along = Array.from({ length: Math.floor(frame.w / 12) }, (_, place) => frame.x + 12 * (place + 1))
   const starts = [frame.x, frame.x + 4, ...bars.placed.map(({ x }) => x + 4)]
   return stave.tolerances.map((line) => {
     const [out, inwards] = line.side === 'above' ? [-5, 12] : [12, -5]
     return {
       of: { ink: 'vermilion', italic: false, role: { stave: stave.stave.key } },
       text: line.label,
+      shorter: line.label.split(',')[0],
       size: 11,
       face: 'sans',
       rank: Number.POSITIVE_INFINITY,
-      spots: [out, inwards].flatMap((off) =>
-        starts.map((x) => ({
-          x: x + (frame.compact ? 2 : 0),
-          y: stave.y + line.y + off,
-          anchor: 'start' as const,
-        })),
+      spots: [starts, along].flatMap((places) =>
+        [out, inwards].flatMap((off) =>
+          places.map((x) => ({
+            x: x + (frame.compact ? 2 : 0),
+            y: stave.y + line.y + off,
+            anchor: 'start' as const,
+          })),
+        ),
       ),
     }
   })

@@ -55,6 +55,8 @@ export function marginShapes(layout: StaffLayout): readonly Shape[] {
         ({ x, y, text, kind }): Shape =>
           words(x, y, text, {
             ...(kind === 'name' ? { size: 13, weight: 600 } : { ink: 'slate' }),
+            // Above its stave a name lies across bar lines.
+            halo: layout.frame.compact,
             role: { stave: stave.key },
           }),
       ),

@@ -15,6 +15,10 @@ export interface ColumnLine {
 const COLUMN = 128
 const NAME_LINE = 15
 const UNIT_LINE = 13
+/** Above its stave a name stands clear of the left bar. */
+const BESIDE_BAR = 5
+/** Room for the reading beside the name on a narrow page. */
+const READING = 76
 
 /** Tolerances that lie too far off to be drawn, in words: "tolerance 391.5 – 404.1". */
 function untoldText({ untold, stave }: StaveParts, format: ReadoutFormat): string | undefined {
@@ -34,43 +38,56 @@ function untoldText({ untold, stave }: StaveParts, format: ReadoutFormat): strin
 const decimalsOf = (value: number, { decimals }: StaveModel): number =>
   Number.isInteger(Number(value.toFixed(decimals))) ? 0 : decimals
 
-/** Name, unit and remarks of a stave, and where its reading stands: beside it, or above it on a narrow page. */
-export function labelColumn(
-  part: StaveParts,
-  y: number,
-  frame: PlotFrame,
-  format: ReadoutFormat,
-): {
-  readonly column: readonly ColumnLine[]
-  readonly readout: { readonly valueX: number; readonly sigmaX: number; readonly y: number }
-} {
+type Line = Pick<ColumnLine, 'text' | 'kind'>
+
+/** Name, unit and remarks of a stave, broken into lines: beside it, or above it on a narrow page. */
+export function columnText(part: StaveParts, frame: PlotFrame, format: ReadoutFormat): readonly Line[] {
   const { stave } = part
   const provisional = stave.segments.at(-1)?.provisional ? ', provisional' : ''
   const untold = untoldText(part, format)
   const unit = `${stave.unitLabel}${provisional}`
-  if (frame.compact) {
-    const nameY = y + part.top - part.above - 6
-    return {
-      column: [
-        { x: frame.x, y: nameY, text: stave.label, kind: 'name' },
-        { x: frame.x, y: nameY + 13, text: untold ? `${unit}, ${untold}` : unit, kind: 'unit' },
-      ],
-      readout: { valueX: frame.x + frame.w, sigmaX: frame.x + frame.w + 46, y: nameY },
-    }
-  }
-  const top = y + part.top + 10
-  const lines: Omit<ColumnLine, 'x' | 'y'>[] = [
-    ...wrapWords(stave.label, COLUMN, 13, 'strong').map((text) => ({ text, kind: 'name' as const })),
-    ...wrapWords(unit, COLUMN, 11).map((text) => ({ text, kind: 'unit' as const })),
-    ...(untold ? wrapWords(untold, COLUMN, 11).map((text) => ({ text, kind: 'unit' as const })) : []),
-  ]
-  const names = lines.filter(({ kind }) => kind === 'name').length
+  const named = (width: number): Line[] =>
+    wrapWords(stave.label, width, 13, 'strong').map((text) => ({ text, kind: 'name' as const }))
+  const second = (text: string, width: number): Line[] =>
+    wrapWords(text, width, 11).map((line) => ({ text: line, kind: 'unit' as const }))
+  return frame.compact
+    ? [...named(frame.w - READING), ...second(untold ? `${unit}, ${untold}` : unit, frame.w - BESIDE_BAR)]
+    : [...named(COLUMN), ...second(unit, COLUMN), ...(untold ? second(untold, COLUMN) : [])]
+}
+
+/** Height of such lines, from a little above the first to the foot of the last. */
+export const columnHeight = (text: readonly Line[]): number =>
+  text.reduce((sum, { kind }) => sum + (kind === 'name' ? NAME_LINE : UNIT_LINE), 4)
+
+/** Where the reading stands below the lines beside a stave, counted from the top of its staff. */
+export const readingBelow = (part: StaveParts, text: readonly Line[]): number =>
+  Math.max(part.bottom - part.top, 84, columnHeight(text) + 14) - 2
+
+/** Places the lines of a stave and its reading. */
+export function labelColumn(
+  part: StaveParts,
+  y: number,
+  frame: PlotFrame,
+  text: readonly Line[],
+): {
+  readonly column: readonly ColumnLine[]
+  readonly readout: { readonly valueX: number; readonly sigmaX: number; readonly y: number }
+} {
+  const top = frame.compact
+    ? y + part.top - part.above + part.freeAbove - columnHeight(text) + 13
+    : y + part.top + 10
+  let next = top
+  const column = text.map((line, index): ColumnLine => {
+    const own = next
+    const isLastName = line.kind === 'name' && text[index + 1]?.kind === 'unit'
+    // Units stand a little closer below the name than names below each other.
+    next += line.kind === 'unit' || (frame.compact && isLastName) ? UNIT_LINE : NAME_LINE
+    return { ...line, x: frame.compact ? frame.x + BESIDE_BAR : 0, y: own }
+  })
   return {
-    column: lines.map((line, index) => ({
-      ...line,
-      x: 0,
-      y: top + Math.min(index, names) * NAME_LINE + Math.max(0, index - names) * UNIT_LINE,
-    })),
-    readout: { valueX: 0, sigmaX: COLUMN, y: y + Math.max(part.bottom, part.top + 84) - 2 },
+    column,
+    readout: frame.compact
+      ? { valueX: frame.x + frame.w, sigmaX: frame.x + frame.w + 46, y: top }
+      : { valueX: 0, sigmaX: COLUMN, y: y + part.top + readingBelow(part, text) },
   }
 }

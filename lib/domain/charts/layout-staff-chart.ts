@@ -1,4 +1,4 @@
-import { type ColumnLine, labelColumn } from './label-column'
+import { type ColumnLine, columnHeight, columnText, labelColumn, readingBelow } from './label-column'
 import { type LotTick, lotTicks } from './lot-axis'
 import { type PlotFrame, plotFrame } from './plot-frame'
 import { type PlacedReason, reasonRows } from './reason-rows'
@@ -42,20 +42,19 @@ export interface StaffLayout {
 /** Room for the pointer's flag above the first stave. */
 const FLAG = 22
 const REASON_ROW = 31
-/** On a narrow page the stave's name stands in a line of its own above it. */
-const NAME_LINE = 20
 
 function stack(
-  parts: readonly StaveParts[],
+  parts: readonly (readonly [StaveParts, ReturnType<typeof columnText>])[],
   compact: boolean,
 ): { readonly ys: readonly number[]; readonly end: number } {
   const ys: number[] = []
   let end = FLAG
-  for (const part of parts) {
-    const y = end + (compact ? NAME_LINE : 0) + part.above - part.top
+  for (const [part, text] of parts) {
+    // On a narrow page the name stands above its stave, in room that no mark needs.
+    const y = end + (compact ? Math.max(0, columnHeight(text) - part.freeAbove) : 0) + part.above - part.top
     ys.push(y)
-    // Label and reading stand beside the staff and need its height even where the staff is lower.
-    end = y + Math.max(part.bottom + part.below, compact ? 0 : part.top + 84 + 10)
+    // Label and reading stand beside the staff and need their height even where the staff is lower.
+    end = y + Math.max(part.bottom + part.below, compact ? 0 : part.top + readingBelow(part, text) + 12)
   }
   return { ys, end }
 }
@@ -75,8 +74,15 @@ function decimation(
  */
 export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
   const frame = plotFrame(width, chart.window, chart.lots.length)
-  const parts = chart.staves.map((stave, index) => staveParts(stave, frame, chart.window, index === 0))
-  const { ys, end } = stack(parts, frame.compact)
+  const changes = chart.barLines.map(({ atIndex }) => atIndex)
+  const parts = chart.staves.map((stave, index) =>
+    staveParts(stave, frame, chart.window, index === 0, changes),
+  )
+  const texts = parts.map((part) => columnText(part, frame, chart))
+  const { ys, end } = stack(
+    parts.map((part, index) => [part, texts[index] ?? []]),
+    frame.compact,
+  )
   const plot = { x: frame.x, y: FLAG, w: frame.w, h: Math.max(1, end - FLAG) }
   const staves = parts.map((part, index): StaveLayout => {
     const y = ys[index] ?? 0
@@ -84,7 +90,7 @@ export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
       ...part,
       y,
       domain: [part.valueAt(plot.y + plot.h - y), part.valueAt(plot.y - y)],
-      ...labelColumn(part, y, frame, chart),
+      ...labelColumn(part, y, frame, texts[index] ?? []),
     }
   })
   const [first, last] = [staves[0], staves.at(-1)]

@@ -126,7 +126,8 @@ function meanShapes(
 ): Shape[] {
   const y = MEAN_Y
   return [
-    ...(bar
+    // Both ends off the strip on one side: there is nothing of the bar to see.
+    ...(bar && (off === 0 || bar[1] > bar[0])
       ? [
           lines(
             [
@@ -162,5 +163,5 @@ function labelOf(input: StripInput): string {
     mean === undefined
       ? 'no mean yet'
       : `mean ${text(mean)}${expanded === undefined ? '' : ` ± ${text(Math.abs(expanded)).replace('+', '')}`} ${input.unit}`
-  return `${input.label}: ${said}${between}; ${input.specimens.length} specimens`
+  return `${input.label}: ${said}${between}; ${input.specimens.length} ${input.specimens.length === 1 ? 'specimen' : 'specimens'}`
 }

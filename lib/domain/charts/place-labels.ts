@@ -18,6 +18,8 @@ export interface Spot {
 export interface Wish<T> {
   readonly of: T
   readonly text: string
+  /** Said instead where there is no room for the whole text. */
+  readonly shorter?: string
   readonly size: number
   readonly face: Face
   /** The higher, the earlier it chooses: how far out the mark stands. */
@@ -58,25 +60,18 @@ export function placeLabels<T>(
   { taken, bars, within }: Surroundings,
 ): { readonly of: T; readonly text: string; readonly spot: Spot }[] {
   const placed: { of: T; text: string; spot: Spot; box: Box }[] = []
-  for (const wish of wishes.toSorted((a, b) => b.rank - a.rank)) {
-    const isFree = (spot: Spot): boolean => {
-      const box = labelBox(wish.text, wish.size, wish.face, spot)
-      return (
-        isInside(box, within) &&
-        !taken.some((one) => boxesTouch(box, one, 1)) &&
-        !placed.some((one) => boxesTouch(box, one.box, 3)) &&
-        !bars.some(({ x, y1, y2 }) => boxesTouch(box, { x, y: y1, w: 0, h: y2 - y1 }, 2))
-      )
+  const isFree = (box: Box): boolean =>
+    isInside(box, within) &&
+    !taken.some((one) => boxesTouch(box, one, 1)) &&
+    !placed.some((one) => boxesTouch(box, one.box, 3)) &&
+    !bars.some(({ x, y1, y2 }) => boxesTouch(box, { x, y: y1, w: 0, h: y2 - y1 }, 2))
+  for (const { of, text: whole, shorter, size, face, spots } of wishes.toSorted((a, b) => b.rank - a.rank))
+    for (const text of shorter === undefined ? [whole] : [whole, shorter]) {
+      const spot = spots.find((one) => isFree(labelBox(text, size, face, one)))
+      if (!spot) continue
+      placed.push({ of, text, spot, box: labelBox(text, size, face, spot) })
+      break
     }
-    const spot = wish.spots.find(isFree)
-    if (spot)
-      placed.push({
-        of: wish.of,
-        text: wish.text,
-        spot,
-        box: labelBox(wish.text, wish.size, wish.face, spot),
-      })
-  }
   return placed.map(({ of, text, spot }) => ({ of, text, spot }))
 }
 

@@ -5,6 +5,8 @@ export const LOT_STEP = 14.2
 export const LEAST_STEP = 12
 /** The first lot stands 1.1 steps from the left bar, and a full window leaves as much at its right. */
 const LEAD = 1.1
+/** In a crowded window that would put its head, or its ledger line, onto the bar. */
+const LEAST_LEAD = 11
 
 /** The horizontal frame that all staves share. */
 export interface PlotFrame {
@@ -33,10 +35,11 @@ export function plotFrame(width: number, window: LotWindow, lotCount: number): P
   const x = compact ? 2 : 138
   const w = Math.max(60, width - x - (compact ? 50 : 62))
   const count = window.to - window.from + 1
-  const fit = w / (Math.max(0, count) - 1 + 2 * LEAD)
+  const even = w / (Math.max(0, count) - 1 + 2 * LEAD)
+  const fit = even * LEAD < LEAST_LEAD ? (w - 2 * LEAST_LEAD) / (count - 1) : even
   const isNewest = window.to >= lotCount - 1
   const step = Math.min(isNewest ? LOT_STEP : 40, count > 0 ? fit : LOT_STEP)
-  const left = window.from - LEAD
+  const left = window.from - Math.max(LEAD, LEAST_LEAD / step)
   const xAt = (index: number): number => x + (index - left) * step
   const end = xAt(window.to) + step / 2
   return {

@@ -59,20 +59,31 @@ function overview(input: StaffChartInput, xAt: (index: number) => number): Shape
   ]
 }
 
-/** Names of months (or days) where they change, as many as stand clear of each other. */
+/** The year at the end of a month's name. */
+const YEAR = / \d{4}$/
+
+/**
+ * Names of months (or days, where no lot names a month) where they change, as many as stand clear of each other;
+ * a year is said once.
+ */
 function monthLabels(input: StaffChartInput, xAt: (index: number) => number, right: number): Shape[] {
   const shapes: Shape[] = []
+  const hasMonths = input.lots.some(({ monthLabel }) => monthLabel !== undefined)
   let free = Number.NEGATIVE_INFINITY
   let before: string | undefined
+  let year: string | undefined
   input.lots.forEach(({ monthLabel, label }, index) => {
-    const text = monthLabel ?? label
+    const name = hasMonths ? monthLabel : label
+    if (name === undefined || name === before) return
+    before = name
+    const own = YEAR.exec(name)?.[0]
+    const text = own !== undefined && own === year ? name.replace(YEAR, '') : name
     const x = xAt(index)
     const w = textWidth(text, 11)
-    if (text !== before && x >= free && x + w <= right) {
-      shapes.push(words(x, TOP + BRUSH_HEIGHT + 17, text, { ink: 'slate' }))
-      free = x + w + 14
-    }
-    before = text
+    if (x < free || x + w > right) return
+    shapes.push(words(x, TOP + BRUSH_HEIGHT + 17, text, { ink: 'slate' }))
+    free = x + w + 14
+    year = own
   })
   return shapes
 }

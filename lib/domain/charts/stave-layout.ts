@@ -54,7 +54,9 @@ export interface StaveParts {
   /** Room it needs above and below its staff. */
   readonly above: number
   readonly below: number
-  /** Nothing but the usual room lies below the staff. */
+  /** As much of the room above as no mark needs. */
+  readonly freeAbove: number
+  /** Nothing lies below the staff. */
   readonly quietBelow: boolean
 }
 
@@ -71,12 +73,13 @@ function slurOf(slur: ChartSlur, notes: readonly PlacedNote[]): PlacedSlur | und
   return { slur, curve, top: Math.min(...heights), bottom: Math.max(...heights) }
 }
 
-/** Lays out one stave by itself: scale, staff, notes, slurs, and the room they need. */
+/** Lays out one stave by itself: scale, staff, notes, slurs, and the room they need; `changes` as in notesToDraw. */
 export function staveParts(
   stave: StaveModel,
   frame: PlotFrame,
   window: LotWindow,
   isFirst: boolean,
+  changes: readonly number[] = [],
 ): StaveParts {
   const { middle, perSpace } = stave.scale
   const yAt = (value: number): number => ((middle - value) / perSpace) * STAFF_SPACE
@@ -96,7 +99,7 @@ export function staveParts(
     const off = y < highest ? 'above' : y > lowest ? 'below' : undefined
     return { note, x: frame.xAt(note.index), y: Math.min(lowest, Math.max(highest, y)), off }
   })
-  const drawn = notesToDraw(stave, frame.step, yAt)
+  const drawn = notesToDraw(stave, frame.step, yAt, changes)
   const notes = all.filter(({ note }) => drawn.has(note.index))
   const slurs = stave.slurs.map((slur) => slurOf(slur, all)).filter((slur) => slur !== undefined)
   const segments = stave.segments.map((segment) => ({
@@ -116,18 +119,18 @@ export function staveParts(
   const tolerances = placed.filter(isNear)
   const lines = stave.segments.flatMap(({ upper, lower, centre }) => [upper, lower, centre])
   const lineHeights = lines.filter((value) => value !== undefined).map(yAt)
-  const above = Math.max(
-    QUIET,
+  const needAbove = Math.max(
+    0,
     ...notes.map(({ y, note }) => top - y + 8 + (note.beyond === 'above' ? WORDS : 0)),
     ...slurs.map((slur) => top - slur.top + (slur.slur.side === 'above' ? WORDS : 0)),
     ...tolerances.map(({ y }) => top - y + (isFirst ? 40 : WORDS + 4)),
     ...lineHeights.map((y) => top - y + 4),
   )
-  const below = Math.max(
-    QUIET,
+  const needBelow = Math.max(
+    0,
     ...notes.map(({ y, note }) => y - bottom + 8 + (note.beyond === 'below' ? WORDS : 0)),
     ...slurs.map((slur) => slur.bottom - bottom + (slur.slur.side === 'below' ? WORDS : 0)),
-    ...tolerances.map(({ y }) => y - bottom + WORDS),
+    ...tolerances.map(({ y }) => y - bottom + WORDS + 4),
     ...lineHeights.map((y) => y - bottom + 4),
     stave.withoutLimits ? WORDS : 0,
   )
@@ -142,8 +145,10 @@ export function staveParts(
     slurs,
     tolerances,
     untold: placed.filter((line) => !isNear(line)),
-    above: Math.min(above, FURTHEST + TOLERANCE_FIRST),
-    below: Math.min(below, FURTHEST + WORDS + 8),
-    quietBelow: below <= QUIET,
+    above: Math.min(Math.max(QUIET, needAbove), FURTHEST + TOLERANCE_FIRST),
+    below: Math.min(Math.max(QUIET, needBelow), FURTHEST + WORDS + 8),
+    freeAbove: Math.max(0, QUIET - needAbove),
+    // A head on the lowest line reaches this far below it.
+    quietBelow: needBelow <= 8,
   }
 }
