@@ -10,14 +10,15 @@ import { replyError, replyJson, replyProblems } from './_reply'
 /** Largest body of a request, bytes: two hundred specimens with room to spare. */
 const MOST_BYTES = 2_000_000
 
+/** The built server hands nothing to a route whose address has no variable part. */
 interface Context {
-  readonly params: Promise<Readonly<Record<string, string>>>
+  readonly params?: Promise<Readonly<Record<string, string>> | undefined>
 }
 
 export type Params = Readonly<Record<string, string>>
 
 const decodedParams = async ({ params }: Context): Promise<Params> => {
-  const entries = Object.entries(await params)
+  const entries = Object.entries((await params) ?? {})
   return Object.fromEntries(entries.map(([name, value]) => [name, decoded(value)]))
 }
 

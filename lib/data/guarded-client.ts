@@ -4,6 +4,7 @@
  * error tells of; remembered calls make it one.
  */
 import type { Engine, Tx } from './database'
+import { sharedState } from './shared-state'
 
 /** A call on a client: `lot.create`, or `$queryRaw` for one that belongs to no model. */
 export interface Call {
@@ -21,11 +22,9 @@ export interface Guards {
   readonly pending?: Set<Call>
 }
 
-const engineOfClient = new WeakMap<object, Engine>()
-
 /** The engine behind a guarded client. */
 export const engineOf = (tx: Tx): Engine => {
-  const engine = engineOfClient.get(tx)
+  const engine = sharedState().engineOf.get(tx)
   if (engine === undefined) throw new Error('Use the client that database().write or .read gives.')
   return engine
 }
@@ -125,6 +124,6 @@ export const guardClient = (client: object, guards: Guards): Tx => {
       return model
     },
   })
-  engineOfClient.set(guarded, guards.engine)
+  sharedState().engineOf.set(guarded, guards.engine)
   return guarded as Tx
 }

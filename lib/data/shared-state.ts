@@ -24,6 +24,8 @@ interface SharedState {
    */
   readonly writeLock: Readonly<Record<Engine, Turns>>
   readonly inside: AsyncLocalStorage<Inside>
+  /** Which engine stands behind each guarded client. */
+  readonly engineOf: WeakMap<object, Engine>
   database: Database | undefined
   signIn: SignInClient | undefined
 }
@@ -35,6 +37,7 @@ export const sharedState = (): SharedState => {
   holder[key] ??= {
     writeLock: { sqlite: createTurns(), postgresql: createTurns(poolSizes.writer) },
     inside: new AsyncLocalStorage<Inside>(),
+    engineOf: new WeakMap<object, Engine>(),
     database: undefined,
     signIn: undefined,
   }

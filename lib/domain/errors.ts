@@ -24,9 +24,17 @@ export interface Problem {
   readonly details?: Readonly<Record<string, string | number | boolean | null>>
 }
 
+/** Marks a refusal whichever copy of this module it was made by: the bundler puts several into one server. */
+const mark = Symbol.for('ledgerline.refusal')
+
 /** Thrown by services. `message` is for the log; `problem` is what the person reads. */
 export class LedgerlineError extends Error {
   readonly problem: Problem
+  readonly [mark] = true
+
+  static override [Symbol.hasInstance](value: unknown): boolean {
+    return typeof value === 'object' && value !== null && mark in value
+  }
 
   constructor(problem: Problem, options?: ErrorOptions) {
     super(`${problem.code}: ${problem.message}`, options)
