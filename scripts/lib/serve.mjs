@@ -41,22 +41,28 @@ export const serve = async (root, settings, { dev = false } = {}) => {
   process.env.DATA_DIR = settings.dataDir
   process.env.DATABASE_URL = settings.databaseUrl
   const https = settings.tls !== undefined
-  let handle
-  const server = makeServer(settings.tls, (request, response) => {
+  // Listens first: with PORT=0 the framework has to know which port it became, as it asks itself for pages.
+  let open
+  const opened = new Promise((resolve) => {
+    open = resolve
+  })
+  const server = makeServer(settings.tls, async (request, response) => {
     settleAddress(request, { trustProxy: settings.trustProxy, https })
+    const handle = await opened
     handle(request, response)
   })
-  const { default: next } = await import('next')
-  const app = next({ dev, dir: root, httpServer: server, hostname: settings.host, port: settings.port })
-  await app.prepare()
-  handle = app.getRequestHandler()
-
   await new Promise((resolve, reject) => {
     server.once('error', (error) => reject(new CommandFailed(listenSentence(error, settings))))
     server.listen({ host: settings.host, port: settings.port }, resolve)
   })
+  const { default: next } = await import('next')
+  const { port } = server.address()
+  const app = next({ dev, dir: root, httpServer: server, hostname: settings.host, port })
+  await app.prepare()
+  open(app.getRequestHandler())
+
   stopOnSignal(server, app)
-  return shownAddress(settings, server.address().port)
+  return shownAddress(settings, port)
 }
 
 const stopOnSignal = (server, app) => {
