@@ -63,7 +63,8 @@ export function slurClearance(curve: SlurCurve, [x, y]: Point): number {
     const distance = distanceToLine(ax - x, ay - y, bx - x, by - y)
     if (distance < nearest) {
       nearest = distance
-      sign = ((ay + by) / 2 - y) * curve.side < 0 ? -1 : 1
+      // On which side of the stretch, produced both ways, the point lies.
+      sign = ((bx - ax) * (ay - y) + (x - ax) * (by - ay)) * curve.side < 0 ? -1 : 1
     }
     ax = bx
     ay = by
@@ -189,9 +190,9 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
   const inner = neighboursOf(notes.slice(1, -1), first, last, side)
   const spread = Math.max(...notes.map(([, y]) => y)) - Math.min(...notes.map(([, y]) => y))
   let best: { cost: number; e1: number; e2: number; height: number } | undefined
-  const offsets = endOffsets(spread)
-  for (const e1 of offsets)
-    for (const e2 of offsets) {
+  const furthest = Math.max(...notes.map(([, y]) => side * y))
+  for (const e1 of endOffsets(furthest - side * first[1]))
+    for (const e2 of endOffsets(furthest - side * last[1])) {
       const extra = EXTRA_OFFSET_COST * (e1 + e2 - 2 * END_OFFSET)
       const most = Math.min(3 * spread + 60, (best?.cost ?? Number.POSITIVE_INFINITY) - extra)
       if (most < LEAST_HEIGHT) continue
@@ -209,16 +210,17 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
 }
 
 /**
- * Offsets to try at either end, px off the note: 8 to 30 in steps of two, then in wider steps up to where the end
- * stands above the furthest note. A long run may climb steeply beside its first or last note; without lifting that
- * end the slur would have to rise like an arch.
+ * Offsets to try at an end, px off its note: 8 to 30 in steps of two, then in wider steps up to where the end
+ * stands clear above the furthest note, which lies `reach` px further out. A long run may climb steeply beside its
+ * first or last note; without lifting that end the slur would have to rise like an arch. Beyond the furthest note
+ * an end is never lifted: the slur would point away from its notes.
  */
-function endOffsets(spread: number): readonly number[] {
+function endOffsets(reach: number): readonly number[] {
   const near = Array.from(
     { length: (MOST_END_OFFSET - END_OFFSET) / 2 + 1 },
     (_, step) => END_OFFSET + 2 * step,
   )
-  const beyond = Math.max(0, Math.ceil((spread + CLEAR + 2 - MOST_END_OFFSET) / WIDE_STEP))
+  const beyond = Math.max(0, Math.ceil((reach + CLEAR + 2 - MOST_END_OFFSET) / WIDE_STEP))
   return [...near, ...Array.from({ length: beyond }, (_, step) => MOST_END_OFFSET + WIDE_STEP * (step + 1))]
 }
 
