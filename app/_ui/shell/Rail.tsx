@@ -26,7 +26,7 @@ export function Rail({ rooms, person, roles, works, theme, signOut }: RailProps)
   useEffect(() => setOpen(false), [path])
   const current = rooms.flat().find(({ href }) => within(path, href))
   return (
-    <div className="rail">
+    <header className="rail">
       <Link className="wordmark" href="/today" prefetch={false}>
         <Wordmark />
       </Link>
@@ -78,6 +78,6 @@ export function Rail({ rooms, person, roles, works, theme, signOut }: RailProps)
           </form>
         </div>
       </div>
-    </div>
+    </header>
   )
 }
