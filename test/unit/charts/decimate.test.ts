@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { buildStaffChart } from '@/lib/domain/charts/build-staff-chart'
 import { notesToDraw } from '@/lib/domain/charts/decimate'
-import type { StaveModel } from '@/lib/domain/charts/staff-chart'
+import type { StaffChart, StaveModel } from '@/lib/domain/charts/staff-chart'
 import { anyChart } from '@/test/support/random-charts'
 import { sampleChart } from '@/test/support/staff-chart-sample'
 
@@ -11,13 +11,17 @@ const heightIn =
   (value: number): number =>
     ((scale.middle - value) / scale.perSpace) * 14
 
-const anyStave = anyChart(160)
-  .map((input) => buildStaffChart({ ...input, window: undefined }))
-  .chain((chart) =>
-    chart.staves.length === 0
-      ? fc.constant({ chart, stave: undefined })
-      : fc.record({ chart: fc.constant(chart), stave: fc.constantFrom(...chart.staves) }),
+interface Drawn {
+  readonly chart: StaffChart
+  readonly stave: StaveModel | undefined
+}
+
+const anyStave: fc.Arbitrary<Drawn> = fc
+  .tuple(
+    anyChart(160).map((input) => buildStaffChart({ ...input, window: undefined })),
+    fc.nat({ max: 2 }),
   )
+  .map(([chart, place]) => ({ chart, stave: chart.staves[place % Math.max(1, chart.staves.length)] }))
 
 const anyStep = fc.double({ min: 0.5, max: 11.9, noNaN: true })
 
