@@ -85,9 +85,9 @@ describe('a server that is killed while four clients post and roll back', () => 
       const posting = lots(round).map((lot) => post(address, lot, acknowledged))
       const rolling = rollBack(address, round)
       const before = acknowledged.length
-      // The first requests wait for the database to be opened; the moment is counted from the first answer.
-      while (acknowledged.length === before) await pause(5)
-      await pause(random() * 1200)
+      // The first requests wait for the database to be opened; the moment is counted from the fourth answer.
+      while (acknowledged.length < before + 4) await pause(5)
+      await pause(random() * 2500)
       await killed(child)
       await Promise.all(posting)
       rolledBack += await rolling
