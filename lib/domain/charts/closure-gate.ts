@@ -51,8 +51,15 @@ function ruleRange(specimens: readonly GateSpecimen[]): readonly [number, number
     .filter((one) => one !== undefined)
   const middle = median(routes.map(({ value }) => value))
   if (middle === undefined) return undefined
-  const gates = specimens.map(({ combined }) => combined).filter((one) => one !== undefined && one > 0)
-  const gate = median(gates.filter((one) => one !== undefined)) ?? (Math.abs(middle) * 0.002 || 1)
+  const gates = specimens
+    .map(({ combined }) => combined)
+    .filter((one): one is number => one !== undefined && one > 0)
+  // Never so narrow that numbers could not tell its two ends apart.
+  const gate = Math.max(
+    median(gates) ?? (Math.abs(middle) * 0.002 || 1),
+    Math.abs(middle) * 1e-9,
+    Number.MIN_VALUE * 1e16,
+  )
   const shown = specimens.flatMap(({ weighed, sounded, combined = 0 }) => [
     ...(weighed ? [weighed.value - combined, weighed.value + combined] : []),
     ...(sounded ? [sounded.value - (sounded.expanded ?? 0), sounded.value + (sounded.expanded ?? 0)] : []),
@@ -96,7 +103,7 @@ export function closureGate(input: GateInput): Drawing {
   return {
     width: WIDTH,
     height: bottom + 22,
-    label: `Two routes to mass per metre, ${input.specimens.length} specimens`,
+    label: `Two routes to mass per metre, ${input.specimens.length} ${input.specimens.length === 1 ? 'specimen' : 'specimens'}`,
     description: input.specimens.map((one) => sentenceOf(one, input)).join(' '),
     shapes: [...shapes, ...(range ? ruleShapes(range, bottom, at, input) : [])],
   }

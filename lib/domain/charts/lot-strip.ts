@@ -41,8 +41,10 @@ function scaleOf(input: StripInput): (value: number) => number {
   const [low, high] = [Math.min(...all), Math.max(...all)]
   const from = lower ?? (upper !== undefined && low >= 0 ? 0 : low)
   const to = upper ?? high
-  if (!(to > from)) return () => (LEFT + RIGHT) / 2
-  return (value) => LEFT + ((value - from) / (to - from)) * (RIGHT - LEFT)
+  // Everything on the wrong side of the only limit: the strip spans what there is to show.
+  const [left, right] = to > from ? [from, to] : [low, high]
+  if (!(right > left)) return () => (LEFT + RIGHT) / 2
+  return (value) => LEFT + ((value - left) / (right - left)) * (RIGHT - LEFT)
 }
 
 function limitShapes(x: number, guardW: number, side: 'lower' | 'upper'): Shape[] {

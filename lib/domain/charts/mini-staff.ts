@@ -19,7 +19,11 @@ export interface MiniStaffInput {
   }[]
 }
 
-const [WIDTH, HEIGHT, MIDDLE, SPACE] = [300, 46, 24, 5]
+const [WIDTH, HEIGHT, MIDDLE] = [300, 46, 24]
+/** px a σ; less where a slur would not find room within the picture otherwise. */
+const spaces = [5, 4, 3, 2.4] as const
+/** Notes further off than this many σ stand at the edge. */
+const FOLLOWED = 3.8
 const HEAD = { rx: 3.4, ry: 2.4 }
 
 /** Without limits: the middle of the values, and a space that holds them. */
@@ -27,7 +31,7 @@ function scaleOf({ values, centre, sigma }: MiniStaffInput): {
   readonly middle: number
   readonly space: number
 } {
-  const known = values.filter((value) => value !== undefined)
+  const known = values.filter((value): value is number => value !== undefined && Number.isFinite(value))
   const [low, high] = [Math.min(...known), Math.max(...known)]
   const middle = centre ?? (known.length > 0 ? (low + high) / 2 : 0)
   if (sigma !== undefined && sigma > 0 && Number.isFinite(sigma)) return { middle, space: sigma }
@@ -35,20 +39,34 @@ function scaleOf({ values, centre, sigma }: MiniStaffInput): {
   return { middle, space: extent > 0 ? extent / 3 : 1 }
 }
 
-/** The staff of one characteristic in little, without words: 300 × 46 px, five px a σ. */
+/** The staff of one characteristic in little, without words: 300 × 46 px, five px a σ where slurs leave room. */
 export function miniStaff(input: MiniStaffInput): Drawing {
+  let picture = drawn(input, spaces[0])
+  for (const smaller of spaces.slice(1)) {
+    if (picture.top >= 1 && picture.bottom <= HEIGHT - 1) break
+    picture = drawn(input, smaller)
+  }
+  return picture.drawing
+}
+
+/** The picture at a scale, and how far its slurs reach. */
+function drawn(
+  input: MiniStaffInput,
+  perSigma: number,
+): { readonly drawing: Drawing; readonly top: number; readonly bottom: number } {
   const { values, sigma, oneSided = false, leftOut = [], beyond = [], runs = [] } = input
   const { middle, space } = scaleOf(input)
   const step = values.length > 1 ? Math.min(16, (WIDTH - 12) / (values.length - 1)) : 0
   const yOf = (value: number): number =>
-    Math.min(43, Math.max(4, MIDDLE - ((value - middle) / space) * SPACE))
+    MIDDLE - Math.min(FOLLOWED, Math.max(-FOLLOWED, (value - middle) / space)) * perSigma
   const points = values.flatMap((value, index) =>
-    value === undefined ? [] : [{ index, x: 6 + index * step, y: yOf(value) }],
+    value === undefined || !Number.isFinite(value) ? [] : [{ index, x: 6 + index * step, y: yOf(value) }],
   )
   const hasLimits = sigma !== undefined && sigma > 0
   const row = (y: number): readonly [number, number, number, number] => [0, y, WIDTH, y]
-  const inner = (oneSided ? [0, 1, 2] : [-2, -1, 0, 1, 2]).map((one) => row(MIDDLE - one * SPACE))
-  const limits = (oneSided ? [3] : [3, -3]).map((one) => row(MIDDLE - one * SPACE))
+  const inner = (oneSided ? [0, 1, 2] : [-2, -1, 0, 1, 2]).map((one) => row(MIDDLE - one * perSigma))
+  const limits = (oneSided ? [3] : [3, -3]).map((one) => row(MIDDLE - one * perSigma))
+  const heights = [MIDDLE]
   const slurs = runs.flatMap(({ members, side, open }): Shape[] => {
     const within = points.filter(({ index }) => index >= (members[0] ?? 0) && index <= (members.at(-1) ?? -1))
     // Half the size of a full staff: half the clearance, by fitting at double size.
@@ -56,7 +74,8 @@ export function miniStaff(input: MiniStaffInput): Drawing {
       within.map(({ x, y }) => [x * 2, y * 2] as const),
       side === 'above' ? -1 : 1,
     )
-    if (!curve || slurPoint(curve, 0.5).some((value) => !Number.isFinite(value))) return []
+    if (!curve) return []
+    for (let part = 0; part <= 24; part += 1) heights.push(slurPoint(curve, part / 24)[1] / 2)
     const ink = open ? 'vermilion' : 'slate'
     const half = slurOutline(curve).map(halved)
     return [
@@ -80,7 +99,7 @@ export function miniStaff(input: MiniStaffInput): Drawing {
         : noteHead(x, y, ink, HEAD, { mark: 'note' }),
     ]
   })
-  return {
+  const drawing: Drawing = {
     width: WIDTH,
     height: HEIGHT,
     label: `${input.title}: ${points.length} lots${hasLimits ? '' : ', no limits yet'}`,
@@ -92,6 +111,7 @@ export function miniStaff(input: MiniStaffInput): Drawing {
       ...notes,
     ],
   }
+  return { drawing, top: Math.min(...heights), bottom: Math.max(...heights) }
 }
 
 const halved = (segment: ReturnType<typeof slurOutline>[number]): ReturnType<typeof slurOutline>[number] => {

@@ -1,6 +1,6 @@
 /**
  * Round values (1, 2 or 5 times a power of ten apart) within a range, about `count` of them, with the decimals
- * they need. A range without extent gives its one value.
+ * they need. A range without extent, or one too narrow for numbers to tell its values apart, gives its one value.
  */
 export function niceTicks(
   from: number,
@@ -8,7 +8,8 @@ export function niceTicks(
   count: number,
 ): { readonly values: readonly number[]; readonly step: number; readonly decimals: number } {
   const extent = to - from
-  if (!(extent > 0) || !Number.isFinite(extent) || !(count > 0)) {
+  const finest = Math.max(Math.abs(from), Math.abs(to)) * 1e-12
+  if (!(extent > Math.max(finest, 1e-290)) || !Number.isFinite(extent) || !(count > 0)) {
     const values = Number.isFinite(from) ? [from] : []
     return { values, step: 0, decimals: 0 }
   }
