@@ -18,6 +18,11 @@ describe('niceTicks', () => {
     expect(niceTicks(Number.NEGATIVE_INFINITY, 0, 4).values).toEqual([])
   })
 
+  it('gives the one value of a range that is too narrow to divide', () => {
+    expect(niceTicks(0, 5e-324, 3).values).toEqual([0])
+    expect(niceTicks(1, 1 + Number.EPSILON, 3).values).toEqual([1])
+  })
+
   it('stays within the range, evenly, with 1, 2 or 5 times a power of ten between, about as many as asked for', () => {
     fc.assert(
       fc.property(
