@@ -36,7 +36,7 @@ function itemsOf(today: TodayFacts, at: number, timeZone: string) {
     (signal): Item => ({
       key: `signal-${signal.id}`,
       mark: signal.rule === 'nine-on-one-side' ? 'run' : 'beyond',
-      title: `${signal.productName}: ${signal.chartName.toLowerCase()}`,
+      title: `${signal.productName}: ${signal.chartName.charAt(0).toLowerCase()}${signal.chartName.slice(1)}`,
       text: `${signal.sentence} It rejects no lot by itself, and has to be answered before release.`,
       stake: `${signal.memberCodes.length} ${signal.memberCodes.length === 1 ? 'lot' : 'lots'}, ${signal.memberCodes.at(-1)} the last`,
       since: days(signal.raisedAt, at),
@@ -50,7 +50,7 @@ function itemsOf(today: TodayFacts, at: number, timeZone: string) {
     words: Pick<Item, 'mark' | 'title' | 'text' | 'deed' | 'href' | 'primary'>,
   ): Item => ({
     key: lot.code,
-    stake: `${lot.productName}${lot.machine ? `, ${lot.machine.toLowerCase()}` : ''}`,
+    stake: `${lot.productName}${lot.machine ? `, ${lot.machine}` : ''}`,
     since: days(lot.madeAt, at),
     ...words,
   })

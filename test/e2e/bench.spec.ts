@@ -77,3 +77,19 @@ test('two digits that changed places are asked about, and answered by a number k
   await expect(question).toHaveCount(0)
   await expect(entry).toHaveValue(/2794/)
 })
+
+test.describe('on a phone', () => {
+  test.use({ viewport: { width: 390, height: 844 } })
+
+  test('the entry moves on to the next specimen’s column, and the digits with it', async ({ page }) => {
+    await signIn(page, 'aldous')
+    await page.goto('/bench/LC-060')
+    await expect(page.getByRole('textbox', { name: /specimen 3/ }).first()).toBeFocused()
+    for (const typed of ['.2795', '.2791', '.2794', '.2789', '.2792', '.2790', '.2796', '.2793'])
+      for (const key of [...typed, 'Enter']) await page.keyboard.press(key)
+    const fourth = page.getByRole('textbox', { name: /specimen 4/ })
+    await expect(fourth.nth(0)).toHaveValue('0.2796')
+    await expect(fourth.nth(1)).toHaveValue('0.2793')
+    await expect(fourth.nth(2)).toBeFocused()
+  })
+})

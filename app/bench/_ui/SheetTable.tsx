@@ -34,10 +34,12 @@ export function SheetTable({ view, bench, rows, planTexts }: Props) {
   const [onPhone, setOnPhone] = useState(current)
   const inputs = useRef(new Map<string, HTMLInputElement>())
 
+  useEffect(() => setOnPhone(Number.parseInt(state.at, 10)), [state.at])
+  // On a phone the column of the next specimen has to be shown before its entry can take the focus.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: runs again once the shown column has changed
   useEffect(() => {
-    setOnPhone(Number.parseInt(state.at, 10))
     if (!state.question) inputs.current.get(state.at)?.focus()
-  }, [state.at, state.question])
+  }, [state.at, state.question, onPhone])
 
   const columnClass = (specimen: number): string | undefined => (specimen === onPhone ? undefined : 'other')
   const hasDraft = (specimen: number): boolean =>

@@ -26,8 +26,8 @@ export function benchViewOf(facts: BenchFacts, personId: number, at: number): Be
       state: lot.state,
       line: [
         facts.materialName,
-        lot.machine?.name.toLowerCase(),
-        lot.die?.name.toLowerCase(),
+        lot.machine?.name,
+        lot.die?.name,
         `made ${formatDateTime(lot.madeAt, works.timeZone)}${facts.makerName ? ` by ${facts.makerName}` : ''}`,
         `specification revision ${facts.revision}`,
       ]
