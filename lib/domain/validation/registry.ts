@@ -1,3 +1,4 @@
+import { controlQuantities } from './control'
 import type { QuantityTable } from './inputs'
 import { metrologyQuantities } from './metrology'
 import { physicsQuantities } from './physics'
@@ -20,4 +21,5 @@ export const quantities: QuantityTable = mergeQuantities(
   physicsQuantities,
   metrologyQuantities,
   statisticsQuantities,
+  controlQuantities,
 )
