@@ -1,6 +1,6 @@
 'use client'
 
-import { Fragment, type KeyboardEvent, useEffect, useRef, useState } from 'react'
+import { Fragment, type KeyboardEvent, useLayoutEffect, useRef, useState } from 'react'
 import { VerdictMark } from '@/app/_ui/charts/VerdictMark'
 import { benchFields, cellKey } from '@/lib/input/bench-cells'
 import { shownValue } from './bench-core'
@@ -31,15 +31,15 @@ export function SheetTable({ view, bench, rows, planTexts }: Props) {
   const specimens = Array.from({ length: view.plan.specimens }, (_, index) => index + 1)
   const fields = benchFields(view.plan)
   const current = Number.parseInt(state.at, 10)
-  const [onPhone, setOnPhone] = useState(current)
+  // A phone shows one column: that of the entry, until another one is looked at.
+  const [looked, setLooked] = useState<{ readonly at: string; readonly specimen: number }>()
+  const onPhone = looked?.at === state.at ? looked.specimen : current
   const inputs = useRef(new Map<string, HTMLInputElement>())
 
-  useEffect(() => setOnPhone(Number.parseInt(state.at, 10)), [state.at])
-  // On a phone the column of the next specimen has to be shown before its entry can take the focus.
-  // biome-ignore lint/correctness/useExhaustiveDependencies: runs again once the shown column has changed
-  useEffect(() => {
-    if (!state.question) inputs.current.get(state.at)?.focus()
-  }, [state.at, state.question, onPhone])
+  // The column of the next specimen is shown by now, so that its entry can take the focus before the next key.
+  useLayoutEffect(() => {
+    if (!state.question && onPhone === current) inputs.current.get(state.at)?.focus()
+  }, [state.at, state.question, onPhone, current])
 
   const columnClass = (specimen: number): string | undefined => (specimen === onPhone ? undefined : 'other')
   const hasDraft = (specimen: number): boolean =>
@@ -102,7 +102,7 @@ export function SheetTable({ view, bench, rows, planTexts }: Props) {
             type="button"
             aria-pressed={specimen === onPhone}
             onClick={() => {
-              setOnPhone(specimen)
+              setLooked({ at: state.at, specimen })
               const first = bench.order.find(
                 (cell) => cell.specimen === specimen && state.values[cell.key] === undefined,
               )
