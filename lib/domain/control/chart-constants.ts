@@ -27,11 +27,20 @@ export interface ChartConstants {
   readonly E3: number
 }
 
+/** Integrals of the range take a while, and a chart asks again and again for the same size. */
+const known = new Map<number, ChartConstants>()
+
 /**
  * Unrounded chart factors for subgroups of n values, limits at 3σ; lower factors are never below zero.
  * Throws a RangeError unless n is whole and at least 2. Source: ISO 7870-2; ASTM E2587 (definitions).
  */
 export function chartConstants(n: number): ChartConstants {
+  const constants = known.get(n) ?? reckon(n)
+  known.set(n, constants)
+  return constants
+}
+
+function reckon(n: number): ChartConstants {
   const [d2, d3, c4] = [meanRelativeRange(n), sdOfRelativeRange(n), meanOfSpread(n)]
   const spread = 3 * Math.sqrt(1 - c4 * c4)
   const A = 3 / Math.sqrt(n)
