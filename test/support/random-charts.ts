@@ -38,12 +38,17 @@ const staveOf = (count: number, key: string): fc.Arbitrary<StaveInput> =>
       shift: fc.double({ min: -4, max: 4, noNaN: true }),
       reach: fc.option(fc.double({ min: 1, max: 12, noNaN: true }), { nil: undefined }),
       answered: fc.boolean(),
+      // Every other stave has left its centre from some lot on: runs, and notes beyond limits within runs.
+      lean: fc.constantFrom(-1, 0, 0, 1),
+      leansFrom: fc.nat({ max: Math.max(0, count - 1) }),
     })
     .map((drawn): StaveInput => {
       const { centre, sigma } = drawn.scale
-      const values = drawn.deviations.map((z) =>
-        z === undefined ? undefined : centre + z * (sigma || Math.abs(centre) / 100),
-      )
+      const values = drawn.deviations.map((drawnZ, index) => {
+        if (drawnZ === undefined) return undefined
+        const z = drawn.lean !== 0 && index >= drawn.leansFrom ? drawn.lean * Math.abs(drawnZ) : drawnZ
+        return centre + z * (sigma || Math.abs(centre) / 100)
+      })
       const set = (fromIndex: number, toIndex: number, number: number, middle: number): ChartLimitSet => ({
         fromIndex,
         toIndex,

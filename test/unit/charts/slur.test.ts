@@ -1,7 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
-  CLEAR,
   fitSlur,
   handleLength,
   type SlurCurve,
@@ -74,7 +73,7 @@ describe('fitSlur', () => {
         const notes = points(heights, step)
         const curve = fitted(notes, side)
         for (const note of notes.slice(1, -1))
-          expect(slurClearance(curve, note)).toBeGreaterThanOrEqual(CLEAR - 0.05)
+          expect(slurClearance(curve, note)).toBeGreaterThanOrEqual(8.5 - 0.05)
         const [first, last] = [notes[0], notes.at(-1)]
         expect((curve.start[1] - (first?.[1] ?? 0)) * side).toBeGreaterThanOrEqual(8 - 1e-9)
         expect((curve.end[1] - (last?.[1] ?? 0)) * side).toBeGreaterThanOrEqual(8 - 1e-9)
@@ -124,7 +123,7 @@ describe('fitSlur', () => {
       const curve = fitted(notes)
       expect(overFurthest(curve, notes)).toBeLessThanOrEqual(20)
       for (const note of notes.slice(1, -1))
-        expect(slurClearance(curve, note)).toBeGreaterThanOrEqual(CLEAR - 0.05)
+        expect(slurClearance(curve, note)).toBeGreaterThanOrEqual(8.5 - 0.05)
     })
 
   it('never costs more than a slur of a coarse grid that is clear, too', () => {
@@ -155,7 +154,7 @@ describe('fitSlur', () => {
             side: -1,
           }
           const own = h + 0.7 * (e1 + e2 - 16)
-          if (own < cheapest && notes.slice(1, -1).every((note) => slurClearance(other, note) >= CLEAR))
+          if (own < cheapest && notes.slice(1, -1).every((note) => slurClearance(other, note) >= 8.5))
             cheapest = own
         }
     expect(cheapest).toBeLessThan(200)
