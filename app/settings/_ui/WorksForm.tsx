@@ -1,5 +1,4 @@
 import { ActionForm } from '@/app/_ui/forms/ActionForm'
-import { CheckField } from '@/app/_ui/forms/ChoiceField'
 import { SelectField } from '@/app/_ui/forms/SelectField'
 import { Submit } from '@/app/_ui/forms/Submit'
 import { NumberField, TextField } from '@/app/_ui/forms/TextField'
@@ -101,11 +100,6 @@ export function WorksForm({ works }: { readonly works: WorksFacts }) {
             value={numberFormat}
           />
           <NumberField name="a4" label="Concert A" unit="Hz" value={shown(works.a4, 'Hz')} />
-          <CheckField
-            name="secondPersonPublishes"
-            label="A second person checks a datasheet before it is published"
-            checked={works.secondPersonPublishes}
-          />
         </div>
       </fieldset>
       <div className="actions">
