@@ -62,7 +62,7 @@ test('quality follows a slur to its lot, holds it, answers the signals, and rele
 test('limits are proposed from chosen lots and frozen by a person', async ({ page }) => {
   await signIn(page, 'orrin')
   await page.goto('/drift/limits?product=LARCH-279&chart=diameter')
-  await page.getByLabel('Last lot').fill('LC-050')
+  await page.getByRole('textbox', { name: 'Last lot' }).fill('LC-050')
   await page.getByLabel('Left out').fill('LC-012')
   await page.getByRole('button', { name: 'Propose' }).click()
   await expect(page.getByText('“LC-012” gives no reason.')).toBeVisible()
