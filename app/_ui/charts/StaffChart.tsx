@@ -157,7 +157,7 @@ export function StaffChart(props: StaffChartProps) {
                     left: layout.plot.x,
                     top: layout.plot.y,
                     width: layout.plot.w,
-                    height: Math.max(layout.bars.y2 + 8, layout.reasonsY - 16) - layout.plot.y,
+                    height: Math.max(layout.bars.y2 + 8, layout.reasonsY - 12) - layout.plot.y,
                   }}
                   onKeyDown={move}
                 />

@@ -118,7 +118,8 @@ function toleranceWishes(stave: StaveLayout, { frame, bars }: StaffLayout): Wish
       shorter: line.label.split(',')[0],
       size: 11,
       face: 'sans',
-      rank: Number.POSITIVE_INFINITY,
+      // Values and runs choose first: they have one place, a name has its whole line.
+      rank: Number.NEGATIVE_INFINITY,
       spots: [starts, along].flatMap((places) =>
         [out, inwards].flatMap((off) =>
           places.map((x) => ({
