@@ -224,6 +224,8 @@ function offRule(side: -1 | 0 | 1, y: number, word: 'weighed' | 'sounded', text:
       anchor: side < 0 ? 'start' : 'end',
       ink: 'brass',
       weight: 600,
+      // They may lie across a bracket of the gate.
+      halo: true,
     }),
   ]
 }
