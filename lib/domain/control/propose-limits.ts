@@ -1,4 +1,5 @@
 import { ok, type Result, refused } from '../result'
+import { autocorrelationBound, lagOneAutocorrelation } from '../statistics/lag-one-autocorrelation'
 import { individualsLimits, meanOf } from './individuals-chart'
 import { meanOfSpread } from './spread-constants'
 
@@ -100,16 +101,8 @@ function spreadLimits(kept: readonly BaselineLot[]): Base {
 /** Lag-1 autocorrelation beyond 1.96/√n is told: neighbours alike make the limits too narrow. */
 function adviceOn(kept: readonly BaselineLot[]): readonly string[] {
   const values = kept.map((lot) => lot.value)
-  const mean = meanOf(values)
-  let products = 0
-  let squares = 0
-  values.forEach((value, index) => {
-    squares += (value - mean) * (value - mean)
-    const next = values[index + 1]
-    if (next !== undefined) products += (value - mean) * (next - mean)
-  })
-  const r1 = squares > 0 ? products / squares : 0
-  const bound = 1.96 / Math.sqrt(values.length)
+  const r1 = lagOneAutocorrelation(values) ?? 0
+  const bound = autocorrelationBound(values.length)
   const advice: string[] = []
   if (Math.abs(r1) > bound)
     advice.push(
