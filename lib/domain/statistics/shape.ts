@@ -1,12 +1,17 @@
 import { mean } from './mean'
 
-/** Central moments m2, m3, m4 with divisor n. Source: NIST/SEMATECH e-Handbook 1.3.5.11. */
+/**
+ * Central moments m2, m3, m4 with divisor n, in units of the largest departure from the mean: only their ratios are
+ * used, and fourth powers of huge or tiny values would leave the range of numbers. Source: NIST/SEMATECH e-Handbook 1.3.5.11.
+ */
 function centralMoments(values: readonly number[]): { m2: number; m3: number; m4: number } | undefined {
   const middle = mean(values)
   if (middle === undefined) return undefined
+  const largest = values.reduce((most, value) => Math.max(most, Math.abs(value - middle)), 0)
+  if (!(largest > 0)) return undefined
   const sums = { m2: 0, m3: 0, m4: 0 }
   for (const value of values) {
-    const d = value - middle
+    const d = (value - middle) / largest
     sums.m2 += d * d
     sums.m3 += d * d * d
     sums.m4 += d * d * d * d

@@ -9,6 +9,7 @@ import { listSignals } from '@/lib/services/list-signals'
 import { recomputeDerived } from '@/lib/services/recompute-derived'
 import { recordSpecimens } from '@/lib/services/record-specimens'
 import { supersedeReading } from '@/lib/services/supersede-reading'
+import { deleteDerivedRows, derivedRows } from '../../support/derived-rows'
 import { dropGuards, onRawConnection } from '../../support/raw-connection'
 import { refusalOf } from '../../support/refusal-of'
 import { steelSheet, typedMass } from '../../support/sheets'
@@ -22,21 +23,6 @@ import {
   setUpSteelWorks,
 } from '../../support/steel-works'
 import { describeOnEachEngine, useFreshDatabase } from '../../support/template-database'
-
-/** All derived rows, without the ids that the engine hands out, in an order of their own. */
-async function derivedRows() {
-  const { read } = database()
-  const results = await read.specimenResult.findMany({ orderBy: { evaluationId: 'asc' } })
-  const summaries = await read.lotSummary.findMany({
-    orderBy: [{ lotId: 'asc' }, { characteristic: 'asc' }],
-    omit: { id: true },
-  })
-  const signals = await read.signal.findMany({
-    orderBy: [{ limitSetId: 'asc' }, { lotId: 'asc' }, { rule: 'asc' }, { side: 'asc' }],
-    omit: { id: true, version: true },
-  })
-  return { results, summaries, signals }
-}
 
 /** A short life of a works: limits, a run, a signal answered, one that no longer holds, corrections, decisions. */
 async function live(works: SteelWorks): Promise<void> {
@@ -124,15 +110,7 @@ describeOnEachEngine('recomputeDerived', () => {
 
   it('gives the same database back when every derived row is deleted', async () => {
     const before = await derivedRows()
-    // Results and signals are guarded: only someone with the file itself can take them away.
-    await dropGuards('SpecimenResult')
-    await dropGuards('Signal')
-    await onRawConnection(async (run) => {
-      await run('delete from "SpecimenResult"')
-      await run('delete from "LotSummary"')
-      // An answer, and that a signal no longer holds, are records of what happened, not derived.
-      await run(`delete from "Signal" where "state" = 'open'`)
-    })
+    await deleteDerivedRows()
     expect((await derivedRows()).results).toEqual([])
     const outcome = await recomputeDerived(works.administrator)
     expect(outcome.restored).toBe(before.results.length)
