@@ -76,10 +76,10 @@ export function unequalSubgroupCharts(
   if (subgroups.length === 0 || subgroups.some((one) => one.length < 2)) return undefined
   const centre = meanOf(subgroups.flat())
   const freedom = subgroups.reduce((sum, one) => sum + one.length - 1, 0)
-  const squares = subgroups.reduce(
-    (sum, one) => sum + (one.length - 1) * (sampleStandardDeviation(one) ?? 0) ** 2,
-    0,
-  )
+  const squares = subgroups.reduce((sum, one) => {
+    const sd = sampleStandardDeviation(one) ?? 0
+    return sum + (one.length - 1) * sd * sd
+  }, 0)
   const pooled = Math.sqrt(squares / freedom)
   return {
     centre,
