@@ -132,15 +132,16 @@ export default roomPage(async (actor, { query }) => {
               },
               { head: 'Product', cell: (lot) => lot.productName },
               { head: 'Made', cell: (lot) => formatDateTime(lot.madeAt, works.timeZone) },
-              { head: 'Machine', cell: (lot) => lot.machine ?? '–' },
-              { head: 'Die', cell: (lot) => lot.die ?? '–' },
+              { head: 'Machine', wideOnly: true, cell: (lot) => lot.machine ?? '–' },
+              { head: 'Die', wideOnly: true, cell: (lot) => lot.die ?? '–' },
               {
                 head: 'Length',
                 unit: 'm',
                 number: true,
+                wideOnly: true,
                 cell: (lot) => formatNumber(lot.lengthMetres, { decimals: 0, decimal: works.numberFormat }),
               },
-              { head: 'Specimens', number: true, cell: (lot) => lot.specimens },
+              { head: 'Specimens', number: true, wideOnly: true, cell: (lot) => lot.specimens },
               {
                 head: 'State',
                 cell: (lot) => (

@@ -4,6 +4,8 @@ export interface Column<Row> {
   readonly head: string
   readonly unit?: string
   readonly number?: boolean
+  /** Left out on a phone, where each row is a block: what is on the row's own page, too. */
+  readonly wideOnly?: boolean
   readonly cell: (row: Row) => ReactNode
 }
 
@@ -37,7 +39,7 @@ export function Table<Row>({ caption, columns, rows, keyOf, leftOut, dense }: Ta
         <tbody>
           {rows.map((row) => (
             <tr key={keyOf(row)} data-left-out={leftOut?.(row) || undefined}>
-              {columns.map(({ head, unit, number, cell }, index) =>
+              {columns.map(({ head, unit, number, cell, wideOnly }, index) =>
                 index === 0 ? (
                   <th key={head} scope="row" className={number ? 'number' : undefined}>
                     {cell(row)}
@@ -45,7 +47,9 @@ export function Table<Row>({ caption, columns, rows, keyOf, leftOut, dense }: Ta
                 ) : (
                   <td
                     key={head}
-                    className={number ? 'number' : undefined}
+                    className={
+                      [number ? 'number' : '', wideOnly ? 'wide-only' : ''].join(' ').trim() || undefined
+                    }
                     data-head={unit ? `${head}, ${unit}` : head}
                   >
                     {cell(row)}

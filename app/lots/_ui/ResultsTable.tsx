@@ -132,7 +132,7 @@ export function ResultsTable({ view }: { readonly view: LotView }) {
   })
   return (
     <div className="table-frame">
-      <table className="table lots-results">
+      <table className="table stack lots-results">
         <caption className="visually-hidden">
           Results of the lot with tolerance, verdict and probability
         </caption>
@@ -158,25 +158,33 @@ export function ResultsTable({ view }: { readonly view: LotView }) {
               <th scope="row" title={row.meaning}>
                 {row.name} <span className="unit">{row.unit}</span>
               </th>
-              <td className="number">
-                <b>{row.mean}</b> {row.expanded ? <small>± {row.expanded}</small> : null}
+              <td className="number" data-head="Lot mean ± U">
+                <span>
+                  <b>{row.mean}</b> {row.expanded ? <small>± {row.expanded}</small> : null}
+                </span>
               </td>
               <td className="strip">
                 <LotStrip {...row.strip} />
               </td>
-              <td>
-                {row.tolerance}
-                {row.spread ? <small> s = {row.spread}</small> : null}
+              <td data-head="Tolerance">
+                <span>
+                  {row.tolerance}
+                  {row.spread ? <small> s = {row.spread}</small> : null}
+                </span>
               </td>
-              <td>
-                {row.verdict ? (
-                  <span className="lots-verdict-cell">
-                    <VerdictMark verdict={row.verdict.mark} /> <em>{row.verdict.word}</em>
-                  </span>
-                ) : null}
-                {row.beyond ? <em className="vermilion"> beyond its control limit</em> : null}
+              <td data-head="Verdict">
+                <span>
+                  {row.verdict ? (
+                    <span className="lots-verdict-cell">
+                      <VerdictMark verdict={row.verdict.mark} /> <em>{row.verdict.word}</em>
+                    </span>
+                  ) : null}
+                  {row.beyond ? <em className="vermilion"> beyond its control limit</em> : null}
+                </span>
               </td>
-              <td className="number">{row.probability}</td>
+              <td className="number" data-head="Probability">
+                {row.probability}
+              </td>
             </tr>
           ))}
         </tbody>
