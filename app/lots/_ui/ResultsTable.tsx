@@ -167,23 +167,27 @@ export function ResultsTable({ view }: { readonly view: LotView }) {
                 <LotStrip {...row.strip} />
               </td>
               <td data-head="Tolerance">
-                <span>
-                  {row.tolerance}
-                  {row.spread ? <small> s = {row.spread}</small> : null}
-                </span>
+                {row.tolerance ? (
+                  <span>
+                    {row.tolerance}
+                    {row.spread ? <small> s = {row.spread}</small> : null}
+                  </span>
+                ) : null}
               </td>
               <td data-head="Verdict">
-                <span>
-                  {row.verdict ? (
-                    <span className="lots-verdict-cell">
-                      <VerdictMark verdict={row.verdict.mark} /> <em>{row.verdict.word}</em>
-                    </span>
-                  ) : null}
-                  {row.beyond ? <em className="vermilion"> beyond its control limit</em> : null}
-                </span>
+                {row.verdict || row.beyond ? (
+                  <span>
+                    {row.verdict ? (
+                      <span className="lots-verdict-cell">
+                        <VerdictMark verdict={row.verdict.mark} /> <em>{row.verdict.word}</em>
+                      </span>
+                    ) : null}
+                    {row.beyond ? <em className="vermilion"> beyond its control limit</em> : null}
+                  </span>
+                ) : null}
               </td>
               <td className="number" data-head="Probability">
-                {row.probability}
+                {row.probability || null}
               </td>
             </tr>
           ))}
