@@ -30,7 +30,6 @@ const pictures = [
     wait: '.staff-plot',
     dark: true,
   },
-  { name: 'bench-phone', path: '/bench/LC-060', username: 'imrie', act: measure, width: 390, height: 844 },
 ]
 
 async function measure(page) {
@@ -68,11 +67,11 @@ try {
     ...(existsSync(debian) ? { executablePath: debian } : {}),
     chromiumSandbox: process.getuid?.() !== 0,
   })
-  for (const { act, dark, height = 900, name, path, username, wait, width = 1440 } of pictures) {
+  for (const { act, dark, name, path, username, wait } of pictures) {
     const context = await browser.newContext({
       baseURL: server.address,
       colorScheme: dark ? 'dark' : 'light',
-      viewport: { width, height },
+      viewport: { width: 1440, height: 900 },
       locale: 'en-GB',
     })
     const page = await context.newPage()
