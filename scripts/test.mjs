@@ -13,7 +13,7 @@ const { setUp } = await import('./setup.mjs')
 const { CommandFailed, fail } = await import('./lib/child.mjs')
 const { provideChromium, providePostgresql } = await import('./lib/debian.mjs')
 const { buildApp } = await import('./lib/build.mjs')
-const { bin, one, playwright, program, runStages, vitest } = await import('./lib/stages.mjs')
+const { bin, notRun, one, playwright, program, runStages, vitest } = await import('./lib/stages.mjs')
 
 /** The share of the long proofs that runs here; `npm run test:long` runs them whole. */
 const share = { LEDGERLINE_SHARE: process.env.LEDGERLINE_SHARE ?? '0.05' }
@@ -46,11 +46,17 @@ const stages = [
   { name: 'unit', run: () => vitest(root, 'unit') },
   { name: 'components', run: () => vitest(root, 'ui') },
   { name: 'integration SQLite', run: () => vitest(root, 'integration') },
-  { name: 'PostgreSQL is there', run: async () => one(await providePostgresql()) },
   {
     name: 'integration PostgreSQL',
-    needs: 'PostgreSQL is there',
-    run: () => vitest(root, 'integration-postgresql'),
+    run: async () => {
+      if (await providePostgresql()) return vitest(root, 'integration-postgresql')
+      // As root the package was tried and failed; anyone else may lack the right to install it.
+      if (process.getuid?.() === 0) return one(false)
+      process.stdout.write(
+        'PostgreSQL: not run. Install its server programs (initdb) to run these tests, too.\n',
+      )
+      return notRun
+    },
   },
   { name: 'long proofs, a share', run: () => vitest(root, 'long', share) },
   {

@@ -10,6 +10,9 @@ import { run } from './child.mjs'
 
 export const one = (ok) => (ok ? { passed: 1, failed: 0 } : { passed: 0, failed: 1 })
 
+/** Nothing could be checked here, and the summary says so. */
+export const notRun = { passed: 0, failed: 0 }
+
 /** A program that is one check: passed when it ends with 0. */
 export const program = async (root, args, env = {}) =>
   one((await run(process.execPath, args, { cwd: root, env })) === 0)
@@ -103,7 +106,7 @@ export const runStages = async (stages, write = (text) => process.stdout.write(t
   write('\n')
   for (const { name, count, took } of done)
     write(
-      `${count.failed > 0 ? 'FAILED' : 'passed'}  ${name.padEnd(28)} ${String(count.passed).padStart(5)} passed ${String(count.failed).padStart(4)} failed ${seconds(took).padStart(7)}\n`,
+      `${count.failed > 0 ? 'FAILED ' : count.passed > 0 ? 'passed ' : 'NOT RUN'}  ${name.padEnd(28)} ${String(count.passed).padStart(5)} passed ${String(count.failed).padStart(4)} failed ${seconds(took).padStart(7)}\n`,
     )
   const total = (key) => done.reduce((sum, { count }) => sum + count[key], 0)
   write(`\n${total('passed')} passed, ${total('failed')} failed\n`)
