@@ -33,6 +33,7 @@ describe('runStages', () => {
     let text = ''
     const passed = await runStages(stages, (part: string) => {
       text += part
+      return true
     })
     return { passed, text, last: text.trimEnd().split('\n').at(-1) }
   }
