@@ -25,7 +25,10 @@ export const createGauge = async (
   code: string,
   input: GaugeInput,
   at: number = Date.now(),
-): Promise<GaugeRow> => createEquipment(kind, actor, code, await valuesOf(input), at)
+): Promise<GaugeRow> => {
+  permit(actor, 'equipment.keep')
+  return createEquipment(kind, actor, code, await valuesOf(input), at)
+}
 
 /** Results already computed keep what they rest on. @throws LedgerlineError not-permitted, not-found, conflict */
 export const updateGauge = async (
@@ -34,7 +37,10 @@ export const updateGauge = async (
   version: number,
   input: GaugeInput,
   at: number = Date.now(),
-): Promise<void> => updateEquipment(kind, actor, code, version, await valuesOf(input), at)
+): Promise<void> => {
+  permit(actor, 'equipment.keep')
+  return updateEquipment(kind, actor, code, version, await valuesOf(input), at)
+}
 
 /** Puts a gauge away, or back into use. @throws LedgerlineError not-permitted, not-found, conflict */
 export const setGaugeActive = (

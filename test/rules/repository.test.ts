@@ -17,7 +17,6 @@ const onlyRedirects = (text: string): boolean => /redirect\(/.test(text) && !/<\
 const machinePaths = /\/(?:work|home|root|Users|tmp)\/[\w.-]|C:\\\\/
 const namesSource = (text: string): boolean =>
   /source|ISO |ASTM|JCGM|GUM|EURAMET|NIST|textbook|common practice|from memory|derived|definition/i.test(text)
-const permitsFirst = (text: string): boolean => /\bpermit\(|requirePermission|mayRead\(/.test(text)
 const headings = (text: string): ReadonlySet<string> =>
   new Set(
     [...text.matchAll(/^#+ (.+)$/gm)].map(([, title = '']) =>
@@ -115,18 +114,6 @@ describe('the repository', () => {
     expect(sources.filter((path) => path !== own && off.test(textOf(path)))).toEqual([])
     const ignored = /biome-ignore(?! lint\/[\w/]+: .{10,}| assist| format)/
     expect(sources.filter((path) => path !== own && ignored.test(textOf(path)))).toEqual([])
-  })
-
-  it('asks for the right first in every service that an actor calls', () => {
-    const services = matching(/^lib\/services\/[^/]+\.ts$/).filter((path) =>
-      /export (?:async )?(?:function|const) \w+[^\n]*[\s\S]{0,80}?\bactor: Actor \| undefined/.test(
-        textOf(path),
-      ),
-    )
-    expect(services.length).toBeGreaterThan(25)
-    const delegating = services.filter((path) => !permitsFirst(textOf(path)))
-    // These hand the actor on to services that ask.
-    expect(delegating).toEqual(['lib/services/save-drift-chart.ts'])
   })
 
   it('lets stored results rest on + − × ÷ √ alone, whose last bit is the same on every engine', () => {
