@@ -32,12 +32,12 @@ const links = (text: string): readonly string[] =>
     /^(https?:|mailto:)/.test(to) ? [] : [to],
   )
 
-function deadLinks(file: string): readonly string[] {
-  return links(textOf(file)).filter((to) => {
+function deadLinks(file: string, text: string = textOf(file)): readonly string[] {
+  return links(text).filter((to) => {
     const [path = '', anchor] = to.split('#')
     const target = path === '' ? file : normalize(join(dirname(file), decodeURI(path)))
     if (!existsSync(join(root, target))) return true
-    return anchor !== undefined && !headings(textOf(target)).has(anchor)
+    return anchor !== undefined && !headings(target === file ? text : textOf(target)).has(anchor)
   })
 }
 
@@ -73,6 +73,7 @@ describe('the repository', () => {
         'vitest.config.ts',
       ],
     ]
+    expect(tops.length).toBeGreaterThan(10)
     expect(tops.filter((top) => !allowed.includes(top))).toEqual([])
   })
 
@@ -81,6 +82,8 @@ describe('the repository', () => {
     expect(pages.length).toBeGreaterThan(20)
     expect(pages.filter((path) => !titled(textOf(path)) && !onlyRedirects(textOf(path)))).toEqual([])
     expect(titled('export default roomPage(async () => <p>Lots</p>)')).toBe(false)
+    expect(onlyRedirects("export default () => { redirect('/today') }")).toBe(true)
+    expect(onlyRedirects("if (!lot) redirect('/lots'); return <p>Lot</p>")).toBe(false)
   })
 
   it('names a source in every file of formulas', () => {
@@ -96,6 +99,14 @@ describe('the repository', () => {
     const documents = matching(/\.md$/)
     expect(documents).toEqual(expect.arrayContaining(['README.md', 'DEVELOPERS.md']))
     expect(documents.flatMap((file) => deadLinks(file).map((to) => `${file}: ${to}`))).toEqual([])
+    const bad =
+      '# Rooms\n[a](#rooms) [b](#halls) [c](lib/nowhere.ts) ![d](public/none.png) [e](DEVELOPERS.md#no)'
+    expect(deadLinks('README.md', bad)).toEqual([
+      '#halls',
+      'lib/nowhere.ts',
+      'public/none.png',
+      'DEVELOPERS.md#no',
+    ])
   })
 
   it('names no folder of a machine', () => {
@@ -114,6 +125,10 @@ describe('the repository', () => {
     expect(sources.filter((path) => path !== own && off.test(textOf(path)))).toEqual([])
     const ignored = /biome-ignore(?! lint\/[\w/]+: .{10,}| assist| format)/
     expect(sources.filter((path) => path !== own && ignored.test(textOf(path)))).toEqual([])
+    const bad = ["it.skip('x')", "describe.only('x')", "test.todo('x')", '// @ts-ignore']
+    expect(bad.filter((text) => !off.test(text))).toEqual([])
+    expect(ignored.test('// biome-ignore lint/a11y: no')).toBe(true)
+    expect(ignored.test('// biome-ignore lint/a11y/useX: the browser does it by itself')).toBe(false)
   })
 
   it('lets stored results rest on + − × ÷ √ alone, whose last bit is the same on every engine', () => {
@@ -128,9 +143,10 @@ describe('the repository', () => {
     ).toEqual([])
   })
 
-  it('serves no page with a style or a script of its own', () => {
-    const inline = /<style[\s>]|dangerouslySetInnerHTML/
+  it('serves no page with a style sheet or a script in its text', () => {
+    const inline = /<(?:style|script)[\s>]|dangerouslySetInnerHTML/
     const inApp = sources.filter((path) => path.startsWith('app/') && inline.test(textOf(path)))
     expect(inApp).toEqual([])
+    expect(inline.test('<style>p{}</style>') && inline.test('<p dangerouslySetInnerHTML={x} />')).toBe(true)
   })
 })

@@ -5,10 +5,34 @@ import { keptFiles, textOf } from '../support/source-files'
 const services = keptFiles().filter((path) => /^lib\/services\/[^/]+\.ts$/.test(path))
 const texts = services.map(textOf)
 
+/** Functions of the services that a page or route calls by name. */
+const servicesOf = (text: string): readonly string[] =>
+  [...text.matchAll(/import (?!type )\{([^}]*)\} from '@\/lib\/services\//g)].flatMap(([, names = '']) =>
+    names
+      .split(',')
+      .map((name) => name.trim())
+      .filter((name) => name !== '' && !name.startsWith('type ')),
+  )
+
 describe('services', () => {
   it('ask for the right before anything is looked up', () => {
     expect(texts.flatMap(askings).filter(({ exported }) => exported).length).toBeGreaterThan(50)
     expect(unasked(texts)).toEqual([])
+  })
+
+  it('are called by pages with the actor, but for what comes before anybody has an account', () => {
+    const pages = keptFiles().filter((path) => /^app\/.*\.tsx?$/.test(path))
+    const taking = new Set(texts.flatMap(askings).map(({ name }) => name))
+    const without = pages.flatMap((path) => servicesOf(textOf(path))).filter((name) => !taking.has(name))
+    expect([...new Set(without)].sort()).toEqual([
+      'createFirstAccount',
+      'demoProgress',
+      'isCodeNeeded',
+      'isFirstAccountMissing',
+      'isWorksMissing',
+      'startOfDay',
+    ])
+    expect(servicesOf("import { findIt, type It } from '@/lib/services/find-it'")).toEqual(['findIt'])
   })
 
   it.each([

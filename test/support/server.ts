@@ -15,7 +15,7 @@ export interface Server {
   /** Everything it said so far. */
   output(): string
   /** Ends it as a person at the keyboard would; resolves with its exit code. */
-  stop(): Promise<number>
+  stop(signal?: 'SIGINT' | 'SIGTERM'): Promise<number>
 }
 
 export interface ServerOptions {
@@ -72,8 +72,8 @@ export async function startServer(options: ServerOptions = {}): Promise<Server> 
     address,
     dataDir,
     output: () => output,
-    stop: async () => {
-      child.kill('SIGTERM')
+    stop: async (signal = 'SIGTERM') => {
+      child.kill(signal)
       return ended(child)
     },
   }
