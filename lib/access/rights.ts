@@ -19,6 +19,8 @@ const table = {
   'lots.read-released': { doing: 'Reading released lots', roles: everyone },
   'drift.read': { doing: 'Reading the control charts', roles: workshop },
   'equipment.read': { doing: 'Reading the equipment list', roles: workshop },
+  'materials-in.read': { doing: 'Reading what materials came in', roles: workshop },
+  'imports.read': { doing: 'Reading imports', roles: workshop },
   'catalogue.read': { doing: 'Reading the catalogue', roles: everyone },
   'datasheets.read': { doing: 'Reading datasheets', roles: everyone },
   'settings.read': { doing: 'Reading the settings of the works', roles: everyone },
@@ -27,6 +29,7 @@ const table = {
 
   // Measuring.
   'lots.open': { doing: 'Opening a lot', roles: measurers },
+  'imports.run': { doing: 'Importing readings', roles: measurers },
   'readings.record': { doing: 'Recording readings', roles: measurers },
   'readings.supersede-own': { doing: 'Correcting readings', roles: measurers },
   'readings.supersede-any': {
@@ -39,6 +42,7 @@ const table = {
   'limits.freeze': { doing: 'Freezing control limits', roles: ['quality'] },
   'signals.answer': { doing: 'Answering a signal', roles: ['quality'] },
   'equipment.keep': { doing: 'Changing the equipment list', roles: ['quality'] },
+  'materials-in.keep': { doing: 'Changing what materials came in', roles: ['quality'] },
   'catalogue.keep': { doing: 'Changing the catalogue', roles: ['quality'] },
 
   // Publishing.

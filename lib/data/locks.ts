@@ -19,6 +19,8 @@ export type LockableTable =
   | 'Rig'
   | 'Machine'
   | 'Die'
+  | 'MaterialIn'
+  | 'Import'
 
 /** Locks one row until the transaction ends; waits for another transaction that holds it. */
 export const lockRow = async (tx: Tx, table: LockableTable, id: number): Promise<void> => {

@@ -119,7 +119,7 @@ CREATE TRIGGER "DatasheetRevision_no_truncate" BEFORE TRUNCATE ON "DatasheetRevi
 EXECUTE FUNCTION ledgerline_refuse('A published datasheet is never changed or removed, a new revision follows it.');
 
 DROP TRIGGER IF EXISTS "LimitSet_keeps_body" ON "LimitSet";
-CREATE TRIGGER "LimitSet_keeps_body" BEFORE UPDATE ON "LimitSet" FOR EACH ROW WHEN (NEW."id" IS DISTINCT FROM OLD."id" OR NEW."productId" IS DISTINCT FROM OLD."productId" OR NEW."characteristic" IS DISTINCT FROM OLD."characteristic" OR NEW."statistic" IS DISTINCT FROM OLD."statistic" OR NEW."number" IS DISTINCT FROM OLD."number" OR NEW."centre" IS DISTINCT FROM OLD."centre" OR NEW."sigma" IS DISTINCT FROM OLD."sigma" OR NEW."lower" IS DISTINCT FROM OLD."lower" OR NEW."upper" IS DISTINCT FROM OLD."upper" OR NEW."sigmaEstimator" IS DISTINCT FROM OLD."sigmaEstimator" OR NEW."lotCount" IS DISTINCT FROM OLD."lotCount" OR NEW."provisional" IS DISTINCT FROM OLD."provisional" OR NEW."baseline" IS DISTINCT FROM OLD."baseline" OR NEW."effectiveFrom" IS DISTINCT FROM OLD."effectiveFrom" OR NEW."frozenAt" IS DISTINCT FROM OLD."frozenAt" OR NEW."frozenById" IS DISTINCT FROM OLD."frozenById" OR NEW."reason" IS DISTINCT FROM OLD."reason")
+CREATE TRIGGER "LimitSet_keeps_body" BEFORE UPDATE ON "LimitSet" FOR EACH ROW WHEN (NEW."id" IS DISTINCT FROM OLD."id" OR NEW."productId" IS DISTINCT FROM OLD."productId" OR NEW."characteristic" IS DISTINCT FROM OLD."characteristic" OR NEW."statistic" IS DISTINCT FROM OLD."statistic" OR NEW."number" IS DISTINCT FROM OLD."number" OR NEW."centre" IS DISTINCT FROM OLD."centre" OR NEW."sigma" IS DISTINCT FROM OLD."sigma" OR NEW."lower" IS DISTINCT FROM OLD."lower" OR NEW."upper" IS DISTINCT FROM OLD."upper" OR NEW."sigmaEstimator" IS DISTINCT FROM OLD."sigmaEstimator" OR NEW."lotCount" IS DISTINCT FROM OLD."lotCount" OR NEW."provisional" IS DISTINCT FROM OLD."provisional" OR NEW."baseline" IS DISTINCT FROM OLD."baseline" OR NEW."effectiveFrom" IS DISTINCT FROM OLD."effectiveFrom" OR NEW."frozenAt" IS DISTINCT FROM OLD."frozenAt" OR NEW."frozenById" IS DISTINCT FROM OLD."frozenById" OR NEW."reason" IS DISTINCT FROM OLD."reason" OR NEW."target" IS DISTINCT FROM OLD."target" OR NEW."rules" IS DISTINCT FROM OLD."rules")
 EXECUTE FUNCTION ledgerline_refuse('Frozen limits are never changed or removed, another set follows them.');
 
 DROP TRIGGER IF EXISTS "LimitSet_no_delete" ON "LimitSet";
@@ -143,7 +143,7 @@ CREATE TRIGGER "Specimen_no_truncate" BEFORE TRUNCATE ON "Specimen" FOR EACH STA
 EXECUTE FUNCTION ledgerline_refuse('A specimen keeps its lot and number and is never removed.');
 
 DROP TRIGGER IF EXISTS "Signal_keeps_body" ON "Signal";
-CREATE TRIGGER "Signal_keeps_body" BEFORE UPDATE ON "Signal" FOR EACH ROW WHEN (NEW."id" IS DISTINCT FROM OLD."id" OR NEW."lotId" IS DISTINCT FROM OLD."lotId" OR NEW."productId" IS DISTINCT FROM OLD."productId" OR NEW."characteristic" IS DISTINCT FROM OLD."characteristic" OR NEW."statistic" IS DISTINCT FROM OLD."statistic" OR NEW."limitSetId" IS DISTINCT FROM OLD."limitSetId" OR NEW."rule" IS DISTINCT FROM OLD."rule" OR NEW."side" IS DISTINCT FROM OLD."side")
+CREATE TRIGGER "Signal_keeps_body" BEFORE UPDATE ON "Signal" FOR EACH ROW WHEN (NEW."id" IS DISTINCT FROM OLD."id" OR NEW."lotId" IS DISTINCT FROM OLD."lotId" OR NEW."productId" IS DISTINCT FROM OLD."productId" OR NEW."characteristic" IS DISTINCT FROM OLD."characteristic" OR NEW."statistic" IS DISTINCT FROM OLD."statistic" OR NEW."limitSetId" IS DISTINCT FROM OLD."limitSetId" OR NEW."rule" IS DISTINCT FROM OLD."rule" OR NEW."side" IS DISTINCT FROM OLD."side" OR NEW."machineId" IS DISTINCT FROM OLD."machineId")
 EXECUTE FUNCTION ledgerline_refuse('A signal keeps what it is about and is never removed, it is answered or marked.');
 
 DROP TRIGGER IF EXISTS "Signal_no_delete" ON "Signal";
@@ -236,6 +236,7 @@ ALTER TABLE "LimitSet" ADD CONSTRAINT "LimitSet_finite" CHECK (
   AND ("sigma" IS NULL OR "sigma" > '-Infinity' AND "sigma" < 'Infinity')
   AND ("lower" IS NULL OR "lower" > '-Infinity' AND "lower" < 'Infinity')
   AND ("upper" IS NULL OR "upper" > '-Infinity' AND "upper" < 'Infinity')
+  AND ("target" IS NULL OR "target" > '-Infinity' AND "target" < 'Infinity')
 ) NOT VALID;
 
 ALTER TABLE "Signal" DROP CONSTRAINT IF EXISTS "Signal_finite";
@@ -331,6 +332,19 @@ ALTER TABLE "Works" ADD CONSTRAINT "Works_finite" CHECK (
   AND ("a4" IS NULL OR "a4" > '-Infinity' AND "a4" < 'Infinity')
 ) NOT VALID;
 
+ALTER TABLE "MaterialIn" DROP CONSTRAINT IF EXISTS "MaterialIn_finite";
+ALTER TABLE "MaterialIn" ADD CONSTRAINT "MaterialIn_finite" CHECK (
+  ("sizeMetres" IS NULL OR "sizeMetres" > '-Infinity' AND "sizeMetres" < 'Infinity')
+  AND ("lengthMetres" IS NULL OR "lengthMetres" > '-Infinity' AND "lengthMetres" < 'Infinity')
+  AND ("massKilograms" IS NULL OR "massKilograms" > '-Infinity' AND "massKilograms" < 'Infinity')
+) NOT VALID;
+
+ALTER TABLE "LotMaterial" DROP CONSTRAINT IF EXISTS "LotMaterial_finite";
+ALTER TABLE "LotMaterial" ADD CONSTRAINT "LotMaterial_finite" CHECK (
+  ("fromMetre" IS NULL OR "fromMetre" > '-Infinity' AND "fromMetre" < 'Infinity')
+  AND ("toMetre" IS NULL OR "toMetre" > '-Infinity' AND "toMetre" < 'Infinity')
+) NOT VALID;
+
 -- Words from closed lists.
 
 ALTER TABLE "Lot" DROP CONSTRAINT IF EXISTS "Lot_state_known";
@@ -362,3 +376,21 @@ ALTER TABLE "Evaluation" ADD CONSTRAINT "Evaluation_cause_known" CHECK ("cause" 
 
 ALTER TABLE "PersonRole" DROP CONSTRAINT IF EXISTS "PersonRole_role_known";
 ALTER TABLE "PersonRole" ADD CONSTRAINT "PersonRole_role_known" CHECK ("role" IN ('bench', 'quality', 'sales', 'administrator')) NOT VALID;
+
+ALTER TABLE "MaterialIn" DROP CONSTRAINT IF EXISTS "MaterialIn_kind_known";
+ALTER TABLE "MaterialIn" ADD CONSTRAINT "MaterialIn_kind_known" CHECK ("kind" IN ('coil', 'spool', 'resin-batch')) NOT VALID;
+
+ALTER TABLE "LotMaterial" DROP CONSTRAINT IF EXISTS "LotMaterial_role_known";
+ALTER TABLE "LotMaterial" ADD CONSTRAINT "LotMaterial_role_known" CHECK ("role" IN ('core', 'wrap-1', 'wrap-2', 'resin')) NOT VALID;
+
+ALTER TABLE "Import" DROP CONSTRAINT IF EXISTS "Import_state_known";
+ALTER TABLE "Import" ADD CONSTRAINT "Import_state_known" CHECK ("state" IN ('draft', 'queued', 'running', 'done', 'cancelled', 'failed')) NOT VALID;
+
+ALTER TABLE "Import" DROP CONSTRAINT IF EXISTS "Import_format_known";
+ALTER TABLE "Import" ADD CONSTRAINT "Import_format_known" CHECK ("format" IN ('csv', 'xlsx')) NOT VALID;
+
+ALTER TABLE "ImportRow" DROP CONSTRAINT IF EXISTS "ImportRow_kind_known";
+ALTER TABLE "ImportRow" ADD CONSTRAINT "ImportRow_kind_known" CHECK ("kind" IN ('refused', 'differs')) NOT VALID;
+
+ALTER TABLE "ImportRow" DROP CONSTRAINT IF EXISTS "ImportRow_state_known";
+ALTER TABLE "ImportRow" ADD CONSTRAINT "ImportRow_state_known" CHECK ("state" IN ('open', 'kept-stored', 'took-file')) NOT VALID;

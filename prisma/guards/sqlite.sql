@@ -81,7 +81,7 @@ BEGIN SELECT RAISE(ABORT, 'Ledgerline: A published datasheet is never changed or
 
 DROP TRIGGER IF EXISTS "LimitSet_keeps_body";
 CREATE TRIGGER "LimitSet_keeps_body" BEFORE UPDATE ON "LimitSet"
-WHEN NEW."id" IS NOT OLD."id" OR NEW."productId" IS NOT OLD."productId" OR NEW."characteristic" IS NOT OLD."characteristic" OR NEW."statistic" IS NOT OLD."statistic" OR NEW."number" IS NOT OLD."number" OR NEW."centre" IS NOT OLD."centre" OR NEW."sigma" IS NOT OLD."sigma" OR NEW."lower" IS NOT OLD."lower" OR NEW."upper" IS NOT OLD."upper" OR NEW."sigmaEstimator" IS NOT OLD."sigmaEstimator" OR NEW."lotCount" IS NOT OLD."lotCount" OR NEW."provisional" IS NOT OLD."provisional" OR NEW."baseline" IS NOT OLD."baseline" OR NEW."effectiveFrom" IS NOT OLD."effectiveFrom" OR NEW."frozenAt" IS NOT OLD."frozenAt" OR NEW."frozenById" IS NOT OLD."frozenById" OR NEW."reason" IS NOT OLD."reason"
+WHEN NEW."id" IS NOT OLD."id" OR NEW."productId" IS NOT OLD."productId" OR NEW."characteristic" IS NOT OLD."characteristic" OR NEW."statistic" IS NOT OLD."statistic" OR NEW."number" IS NOT OLD."number" OR NEW."centre" IS NOT OLD."centre" OR NEW."sigma" IS NOT OLD."sigma" OR NEW."lower" IS NOT OLD."lower" OR NEW."upper" IS NOT OLD."upper" OR NEW."sigmaEstimator" IS NOT OLD."sigmaEstimator" OR NEW."lotCount" IS NOT OLD."lotCount" OR NEW."provisional" IS NOT OLD."provisional" OR NEW."baseline" IS NOT OLD."baseline" OR NEW."effectiveFrom" IS NOT OLD."effectiveFrom" OR NEW."frozenAt" IS NOT OLD."frozenAt" OR NEW."frozenById" IS NOT OLD."frozenById" OR NEW."reason" IS NOT OLD."reason" OR NEW."target" IS NOT OLD."target" OR NEW."rules" IS NOT OLD."rules"
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: Frozen limits are never changed or removed, another set follows them.'); END;
 
 DROP TRIGGER IF EXISTS "LimitSet_no_delete";
@@ -99,7 +99,7 @@ BEGIN SELECT RAISE(ABORT, 'Ledgerline: A specimen keeps its lot and number and i
 
 DROP TRIGGER IF EXISTS "Signal_keeps_body";
 CREATE TRIGGER "Signal_keeps_body" BEFORE UPDATE ON "Signal"
-WHEN NEW."id" IS NOT OLD."id" OR NEW."lotId" IS NOT OLD."lotId" OR NEW."productId" IS NOT OLD."productId" OR NEW."characteristic" IS NOT OLD."characteristic" OR NEW."statistic" IS NOT OLD."statistic" OR NEW."limitSetId" IS NOT OLD."limitSetId" OR NEW."rule" IS NOT OLD."rule" OR NEW."side" IS NOT OLD."side"
+WHEN NEW."id" IS NOT OLD."id" OR NEW."lotId" IS NOT OLD."lotId" OR NEW."productId" IS NOT OLD."productId" OR NEW."characteristic" IS NOT OLD."characteristic" OR NEW."statistic" IS NOT OLD."statistic" OR NEW."limitSetId" IS NOT OLD."limitSetId" OR NEW."rule" IS NOT OLD."rule" OR NEW."side" IS NOT OLD."side" OR NEW."machineId" IS NOT OLD."machineId"
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: A signal keeps what it is about and is never removed, it is answered or marked.'); END;
 
 DROP TRIGGER IF EXISTS "Signal_no_delete";
@@ -167,6 +167,7 @@ WHEN typeof(NEW."centre") NOT IN ('real', 'integer', 'null') OR abs(NEW."centre"
   OR typeof(NEW."sigma") NOT IN ('real', 'integer', 'null') OR abs(NEW."sigma") > 1.7976931348623157e308
   OR typeof(NEW."lower") NOT IN ('real', 'integer', 'null') OR abs(NEW."lower") > 1.7976931348623157e308
   OR typeof(NEW."upper") NOT IN ('real', 'integer', 'null') OR abs(NEW."upper") > 1.7976931348623157e308
+  OR typeof(NEW."target") NOT IN ('real', 'integer', 'null') OR abs(NEW."target") > 1.7976931348623157e308
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in LimitSet is not finite.'); END;
 
 DROP TRIGGER IF EXISTS "LimitSet_finite_update";
@@ -175,6 +176,7 @@ WHEN typeof(NEW."centre") NOT IN ('real', 'integer', 'null') OR abs(NEW."centre"
   OR typeof(NEW."sigma") NOT IN ('real', 'integer', 'null') OR abs(NEW."sigma") > 1.7976931348623157e308
   OR typeof(NEW."lower") NOT IN ('real', 'integer', 'null') OR abs(NEW."lower") > 1.7976931348623157e308
   OR typeof(NEW."upper") NOT IN ('real', 'integer', 'null') OR abs(NEW."upper") > 1.7976931348623157e308
+  OR typeof(NEW."target") NOT IN ('real', 'integer', 'null') OR abs(NEW."target") > 1.7976931348623157e308
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in LimitSet is not finite.'); END;
 
 DROP TRIGGER IF EXISTS "Signal_finite_insert";
@@ -363,6 +365,32 @@ WHEN typeof(NEW."latitudeDegrees") NOT IN ('real', 'integer', 'null') OR abs(NEW
   OR typeof(NEW."a4") NOT IN ('real', 'integer', 'null') OR abs(NEW."a4") > 1.7976931348623157e308
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in Works is not finite.'); END;
 
+DROP TRIGGER IF EXISTS "MaterialIn_finite_insert";
+CREATE TRIGGER "MaterialIn_finite_insert" BEFORE INSERT ON "MaterialIn"
+WHEN typeof(NEW."sizeMetres") NOT IN ('real', 'integer', 'null') OR abs(NEW."sizeMetres") > 1.7976931348623157e308
+  OR typeof(NEW."lengthMetres") NOT IN ('real', 'integer', 'null') OR abs(NEW."lengthMetres") > 1.7976931348623157e308
+  OR typeof(NEW."massKilograms") NOT IN ('real', 'integer', 'null') OR abs(NEW."massKilograms") > 1.7976931348623157e308
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in MaterialIn is not finite.'); END;
+
+DROP TRIGGER IF EXISTS "MaterialIn_finite_update";
+CREATE TRIGGER "MaterialIn_finite_update" BEFORE UPDATE ON "MaterialIn"
+WHEN typeof(NEW."sizeMetres") NOT IN ('real', 'integer', 'null') OR abs(NEW."sizeMetres") > 1.7976931348623157e308
+  OR typeof(NEW."lengthMetres") NOT IN ('real', 'integer', 'null') OR abs(NEW."lengthMetres") > 1.7976931348623157e308
+  OR typeof(NEW."massKilograms") NOT IN ('real', 'integer', 'null') OR abs(NEW."massKilograms") > 1.7976931348623157e308
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in MaterialIn is not finite.'); END;
+
+DROP TRIGGER IF EXISTS "LotMaterial_finite_insert";
+CREATE TRIGGER "LotMaterial_finite_insert" BEFORE INSERT ON "LotMaterial"
+WHEN typeof(NEW."fromMetre") NOT IN ('real', 'integer', 'null') OR abs(NEW."fromMetre") > 1.7976931348623157e308
+  OR typeof(NEW."toMetre") NOT IN ('real', 'integer', 'null') OR abs(NEW."toMetre") > 1.7976931348623157e308
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in LotMaterial is not finite.'); END;
+
+DROP TRIGGER IF EXISTS "LotMaterial_finite_update";
+CREATE TRIGGER "LotMaterial_finite_update" BEFORE UPDATE ON "LotMaterial"
+WHEN typeof(NEW."fromMetre") NOT IN ('real', 'integer', 'null') OR abs(NEW."fromMetre") > 1.7976931348623157e308
+  OR typeof(NEW."toMetre") NOT IN ('real', 'integer', 'null') OR abs(NEW."toMetre") > 1.7976931348623157e308
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: A number in LotMaterial is not finite.'); END;
+
 -- Words from closed lists.
 
 DROP TRIGGER IF EXISTS "Lot_state_insert";
@@ -464,3 +492,63 @@ DROP TRIGGER IF EXISTS "PersonRole_role_update";
 CREATE TRIGGER "PersonRole_role_update" BEFORE UPDATE OF "role" ON "PersonRole"
 WHEN NEW."role" NOT IN ('bench', 'quality', 'sales', 'administrator')
 BEGIN SELECT RAISE(ABORT, 'Ledgerline: PersonRole has no role of that name.'); END;
+
+DROP TRIGGER IF EXISTS "MaterialIn_kind_insert";
+CREATE TRIGGER "MaterialIn_kind_insert" BEFORE INSERT ON "MaterialIn"
+WHEN NEW."kind" NOT IN ('coil', 'spool', 'resin-batch')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: MaterialIn has no kind of that name.'); END;
+
+DROP TRIGGER IF EXISTS "MaterialIn_kind_update";
+CREATE TRIGGER "MaterialIn_kind_update" BEFORE UPDATE OF "kind" ON "MaterialIn"
+WHEN NEW."kind" NOT IN ('coil', 'spool', 'resin-batch')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: MaterialIn has no kind of that name.'); END;
+
+DROP TRIGGER IF EXISTS "LotMaterial_role_insert";
+CREATE TRIGGER "LotMaterial_role_insert" BEFORE INSERT ON "LotMaterial"
+WHEN NEW."role" NOT IN ('core', 'wrap-1', 'wrap-2', 'resin')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: LotMaterial has no role of that name.'); END;
+
+DROP TRIGGER IF EXISTS "LotMaterial_role_update";
+CREATE TRIGGER "LotMaterial_role_update" BEFORE UPDATE OF "role" ON "LotMaterial"
+WHEN NEW."role" NOT IN ('core', 'wrap-1', 'wrap-2', 'resin')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: LotMaterial has no role of that name.'); END;
+
+DROP TRIGGER IF EXISTS "Import_state_insert";
+CREATE TRIGGER "Import_state_insert" BEFORE INSERT ON "Import"
+WHEN NEW."state" NOT IN ('draft', 'queued', 'running', 'done', 'cancelled', 'failed')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: Import has no state of that name.'); END;
+
+DROP TRIGGER IF EXISTS "Import_state_update";
+CREATE TRIGGER "Import_state_update" BEFORE UPDATE OF "state" ON "Import"
+WHEN NEW."state" NOT IN ('draft', 'queued', 'running', 'done', 'cancelled', 'failed')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: Import has no state of that name.'); END;
+
+DROP TRIGGER IF EXISTS "Import_format_insert";
+CREATE TRIGGER "Import_format_insert" BEFORE INSERT ON "Import"
+WHEN NEW."format" NOT IN ('csv', 'xlsx')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: Import has no format of that name.'); END;
+
+DROP TRIGGER IF EXISTS "Import_format_update";
+CREATE TRIGGER "Import_format_update" BEFORE UPDATE OF "format" ON "Import"
+WHEN NEW."format" NOT IN ('csv', 'xlsx')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: Import has no format of that name.'); END;
+
+DROP TRIGGER IF EXISTS "ImportRow_kind_insert";
+CREATE TRIGGER "ImportRow_kind_insert" BEFORE INSERT ON "ImportRow"
+WHEN NEW."kind" NOT IN ('refused', 'differs')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: ImportRow has no kind of that name.'); END;
+
+DROP TRIGGER IF EXISTS "ImportRow_kind_update";
+CREATE TRIGGER "ImportRow_kind_update" BEFORE UPDATE OF "kind" ON "ImportRow"
+WHEN NEW."kind" NOT IN ('refused', 'differs')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: ImportRow has no kind of that name.'); END;
+
+DROP TRIGGER IF EXISTS "ImportRow_state_insert";
+CREATE TRIGGER "ImportRow_state_insert" BEFORE INSERT ON "ImportRow"
+WHEN NEW."state" NOT IN ('open', 'kept-stored', 'took-file')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: ImportRow has no state of that name.'); END;
+
+DROP TRIGGER IF EXISTS "ImportRow_state_update";
+CREATE TRIGGER "ImportRow_state_update" BEFORE UPDATE OF "state" ON "ImportRow"
+WHEN NEW."state" NOT IN ('open', 'kept-stored', 'took-file')
+BEGIN SELECT RAISE(ABORT, 'Ledgerline: ImportRow has no state of that name.'); END;
