@@ -1,7 +1,4 @@
-import type { BarLine, BarLineInput, LotWindow } from './staff-chart'
-
-/** What comes first when several things changed before one lot. */
-const order = ['limit-set', 'specification', 'die', 'machine', 'setting'] as const
+import { type BarLine, type BarLineInput, barLineKinds, type LotWindow } from './staff-chart'
 
 /**
  * Bar lines within a window, one per place: reasons that fall together are told together. A change before the
@@ -11,12 +8,14 @@ export function barLinesWithin(inputs: readonly BarLineInput[], window: LotWindo
   const places = new Map<number, BarLineInput[]>()
   for (const input of inputs) {
     if (!(input.atIndex >= window.from && input.atIndex <= window.to)) continue
-    places.set(input.atIndex, [...(places.get(input.atIndex) ?? []), input])
+    const together = places.get(input.atIndex)
+    if (together) together.push(input)
+    else places.set(input.atIndex, [input])
   }
   return [...places.entries()]
     .sort(([a], [b]) => a - b)
     .map(([atIndex, together]) => {
-      const sorted = together.toSorted((a, b) => order.indexOf(a.kind) - order.indexOf(b.kind))
+      const sorted = together.toSorted((a, b) => barLineKinds.indexOf(a.kind) - barLineKinds.indexOf(b.kind))
       return {
         atIndex,
         double: sorted.some(({ kind }) => kind === 'limit-set'),

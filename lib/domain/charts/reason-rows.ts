@@ -1,4 +1,4 @@
-import type { BarLine } from './staff-chart'
+import type { BarLine, BarLineKind } from './staff-chart'
 import { textWidth } from './text-width'
 
 export interface PlacedReason {
@@ -11,9 +11,25 @@ export interface PlacedReason {
 const widthOf = ({ reason, detail }: BarLine): number =>
   Math.max(textWidth(reason, 13, 'italic') * 1.04, textWidth(detail, 11))
 
+/** Who chooses first where reasons are dense: what changes seldom and tells most. */
+const ranks: Readonly<Record<BarLineKind, number>> = {
+  'limit-set': 0,
+  product: 0,
+  die: 1,
+  specification: 1,
+  machine: 2,
+  coil: 2,
+  resin: 2,
+  setting: 3,
+  spool: 3,
+}
+
+const rankOf = ({ kinds }: BarLine): number => Math.min(...kinds.map((kind) => ranks[kind]))
+
 /**
  * Reasons stand under their bar lines in one row, or in a second one where the first is taken; what fits in
- * neither is left out. Changes of limits and dies choose before settings, and later before earlier.
+ * neither is left out. Limits and products choose before dies, dies before machines and materials, settings and
+ * spools last; later before earlier.
  */
 export function reasonRows(
   bars: readonly BarLine[],
@@ -22,9 +38,7 @@ export function reasonRows(
 ): PlacedReason[] {
   const taken: { row: 0 | 1; from: number; to: number }[] = []
   const rows = new Map<BarLine, 0 | 1>()
-  const rank = ({ kinds }: BarLine): number =>
-    kinds.includes('limit-set') ? 0 : kinds.includes('die') || kinds.includes('specification') ? 1 : 2
-  for (const bar of bars.toSorted((a, b) => rank(a) - rank(b) || b.atIndex - a.atIndex)) {
+  for (const bar of bars.toSorted((a, b) => rankOf(a) - rankOf(b) || b.atIndex - a.atIndex)) {
     const from = xOf(bar)
     const to = from + widthOf(bar) + 10
     if (to > right) continue

@@ -65,7 +65,20 @@ export interface StaveInput {
   readonly signals: readonly ChartSignal[]
 }
 
-export type BarLineKind = 'die' | 'machine' | 'setting' | 'specification' | 'limit-set'
+/** What can change between two lots, in the order in which it is told when it changes together. */
+export const barLineKinds = [
+  'limit-set',
+  'product',
+  'specification',
+  'die',
+  'machine',
+  'coil',
+  'spool',
+  'resin',
+  'setting',
+] as const
+
+export type BarLineKind = (typeof barLineKinds)[number]
 
 /** Something changed before the lot at `atIndex`. */
 export interface BarLineInput {

@@ -32,6 +32,15 @@ describe('barLinesWithin', () => {
     ])
   })
 
+  it('tells product and materials in their places between them', () => {
+    const kinds = ['spool', 'setting', 'coil', 'die', 'resin', 'product', 'limit-set'] as const
+    const [told] = barLinesWithin(
+      kinds.map((kind) => line(4, kind, kind)),
+      { from: 0, to: 9 },
+    )
+    expect(told?.reason).toBe('limit-set, product, die, coil, spool, resin, setting')
+  })
+
   it('is double for limits only, in order of lots', () => {
     const told = barLinesWithin([line(7, 'die', 'b'), line(3, 'limit-set', 'a')], { from: 0, to: 9 })
     expect(told.map(({ atIndex, double }) => [atIndex, double])).toEqual([

@@ -32,6 +32,15 @@ describe('reasonRows', () => {
     expect(rows.map(({ row }) => row)).toEqual([undefined, 0, 1])
   })
 
+  it('lets a product choose before a coil, and a coil before a spool', () => {
+    const rows = reasonRows(
+      [bar(0, 'spool', 'spool S-7'), bar(1, 'coil', 'coil C-118'), bar(2, 'product', 'Larch 254')],
+      xOf,
+      800,
+    )
+    expect(rows.map(({ row }) => row)).toEqual([undefined, 1, 0])
+  })
+
   it('leaves out what would run off the page', () => {
     expect(reasonRows([bar(70, 'die', 'die 7 in')], xOf, 720)[0]?.row).toBeUndefined()
   })
