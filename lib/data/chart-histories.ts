@@ -3,10 +3,13 @@ import { MODEL_VERSION } from '@/lib/domain/metrology/model-version'
 import type { LotSummaryBody } from '@/lib/domain/quality/lot-summary'
 import type { ChartedStatistic, ChartHistory, ChartPoint } from '@/lib/domain/record/chart-history'
 import { chartValue } from '@/lib/domain/record/chart-value'
+import { targetOf } from '@/lib/domain/record/target-of'
+import type { LotWriteState, MachineSignals } from '@/lib/domain/record/write-state'
 import type { Tx } from './database'
 import { engineOf } from './guarded-client'
 import { frozenLimitsOf, type LimitSetRow, listLimitSets } from './limit-sets'
-import { listProductSignals, storedSignalOf } from './signals'
+import { listMachineSignals, listProductSignals, type SignalRow, storedSignalOf } from './signals'
+import { listSpecificationBodies } from './specifications'
 
 export const isCharacteristic = (text: string): text is CharacteristicId =>
   (characteristicIds as readonly string[]).includes(text)
@@ -23,23 +26,27 @@ export async function loadChartHistories(tx: Tx, productId: number): Promise<rea
   ])
   const evaluatedAt = await lastEvaluations(tx, productId)
   const signals = await listProductSignals(tx, productId)
+  const bodies = await listSpecificationBodies(tx, productId)
   return groupByChart(sets).flatMap(({ characteristic, statistic, limitSets }): ChartHistory[] => {
     if (!isCharacteristic(characteristic)) return []
     const points = summaries
       .filter((one) => one.characteristic === characteristic)
       .flatMap((one): ChartPoint[] => {
         const value = chartValue(statistic, one)
-        return value === undefined
-          ? []
-          : [
-              {
-                lotId: one.lotId,
-                code: one.code,
-                madeAt: one.madeAt,
-                value,
-                evaluatedAt: evaluatedAt.get(one.lotId) ?? 0,
-              },
-            ]
+        if (value === undefined) return []
+        const body = bodies.get(one.specificationRevisionId)
+        const target = body && targetOf(body, characteristic, statistic)
+        return [
+          {
+            lotId: one.lotId,
+            code: one.code,
+            madeAt: one.madeAt,
+            value,
+            ...(target === undefined ? {} : { target }),
+            ...(one.machineId === undefined ? {} : { machineId: one.machineId }),
+            evaluatedAt: evaluatedAt.get(one.lotId) ?? 0,
+          },
+        ]
       })
     return [
       {
@@ -52,6 +59,46 @@ export async function loadChartHistories(tx: Tx, productId: number): Promise<rea
           .map(storedSignalOf),
       },
     ]
+  })
+}
+
+/**
+ * Charts of everything a machine makes but one product, and the signals of the machine’s own charts: what the
+ * rules over products rest on.
+ */
+export async function loadMachineCharts(
+  tx: Tx,
+  machineId: number,
+  butProductId?: number,
+): Promise<NonNullable<LotWriteState['machine']>> {
+  const made = await tx.lot.groupBy({
+    by: ['productId'],
+    where: { machineId, ...(butProductId === undefined ? {} : { productId: { not: butProductId } }) },
+    orderBy: { productId: 'asc' },
+  })
+  const products = []
+  for (const { productId } of made)
+    products.push({ productId, charts: await loadChartHistories(tx, productId) })
+  return { id: machineId, products, signals: signalsByChart(await listMachineSignals(tx, machineId)) }
+}
+
+function signalsByChart(rows: readonly SignalRow[]): readonly MachineSignals[] {
+  const charts = new Map<string, SignalRow[]>()
+  for (const row of rows) {
+    const key = `${row.characteristic} ${row.statistic}`
+    charts.set(key, [...(charts.get(key) ?? []), row])
+  }
+  return [...charts.values()].flatMap((signals): MachineSignals[] => {
+    const [first] = signals
+    return first && isCharacteristic(first.characteristic)
+      ? [
+          {
+            characteristic: first.characteristic,
+            statistic: statisticOf(first.statistic),
+            signals: signals.map(storedSignalOf),
+          },
+        ]
+      : []
   })
 }
 
@@ -78,6 +125,8 @@ export interface ChartedSummary extends LotSummaryBody {
   readonly code: string
   readonly madeAt: number
   readonly characteristic: string
+  readonly machineId: number | undefined
+  readonly specificationRevisionId: number
 }
 
 /** Summaries of the charted lots of a product: those whose plan was complete once. In chart order. */
@@ -106,10 +155,16 @@ export const listChartedSummaries = async (
         uCommon: true,
         uMean: true,
         madeAt: true,
-        lot: { select: { code: true } },
+        machineId: true,
+        lot: { select: { code: true, specificationRevisionId: true } },
       },
     })
-  ).map(({ lot, madeAt, ...row }) => ({ ...row, madeAt: madeAt.getTime(), code: lot.code }))
+  ).map(({ lot, machineId, madeAt, ...row }) => ({
+    ...row,
+    ...lot,
+    madeAt: madeAt.getTime(),
+    machineId: machineId ?? undefined,
+  }))
 
 /** When the newest evaluation in force of each lot was made, epoch milliseconds, by lot. */
 async function lastEvaluations(tx: Tx, productId: number): Promise<ReadonlyMap<number, number>> {

@@ -1,3 +1,4 @@
+import { type ControlRule, controlRules } from '@/lib/domain/control/find-signals'
 import type { FrozenLimits } from '@/lib/domain/record/chart-history'
 import type { Tx } from './database'
 
@@ -25,6 +26,10 @@ export interface LimitSetRow {
   readonly frozenAt: number
   readonly frozenById: number | undefined
   readonly reason: string
+  /** What the specification asked for when the baseline was made, SI. */
+  readonly target: number | undefined
+  /** Rules that are asked; undefined for all. */
+  readonly rules: readonly ControlRule[] | undefined
   readonly supersededAt: number | undefined
 }
 
@@ -46,6 +51,8 @@ const select = {
   frozenAt: true,
   frozenById: true,
   reason: true,
+  target: true,
+  rules: true,
   supersededAt: true,
 } as const
 
@@ -57,17 +64,36 @@ export const listLimitSets = async (tx: Tx, productId: number): Promise<readonly
       select,
       orderBy: [{ characteristic: 'asc' }, { statistic: 'asc' }, { number: 'asc' }],
     })
-  ).map(({ lower, upper, baseline, effectiveFrom, frozenAt, frozenById, supersededAt, ...row }) => ({
-    ...row,
-    lower: lower ?? undefined,
-    upper: upper ?? undefined,
-    // Only our own canonical JSON is ever written there.
-    baseline: JSON.parse(baseline) as LimitBaseline,
-    effectiveFrom: effectiveFrom.getTime(),
-    frozenAt: frozenAt.getTime(),
-    frozenById: frozenById ?? undefined,
-    supersededAt: supersededAt?.getTime(),
-  }))
+  ).map(
+    ({
+      lower,
+      upper,
+      target,
+      rules,
+      baseline,
+      effectiveFrom,
+      frozenAt,
+      frozenById,
+      supersededAt,
+      ...row
+    }) => ({
+      ...row,
+      lower: lower ?? undefined,
+      upper: upper ?? undefined,
+      target: target ?? undefined,
+      rules: rules === null ? undefined : rulesOf(rules),
+      // Only our own canonical JSON is ever written there.
+      baseline: JSON.parse(baseline) as LimitBaseline,
+      effectiveFrom: effectiveFrom.getTime(),
+      frozenAt: frozenAt.getTime(),
+      frozenById: frozenById ?? undefined,
+      supersededAt: supersededAt?.getTime(),
+    }),
+  )
+
+/** Rules as they stand in the table, names divided by spaces. */
+const rulesOf = (text: string): readonly ControlRule[] =>
+  (Object.keys(controlRules) as ControlRule[]).filter((rule) => text.split(' ').includes(rule))
 
 /** A limit set as the rules need it. */
 export const frozenLimitsOf = (row: LimitSetRow): FrozenLimits => ({
@@ -80,6 +106,8 @@ export const frozenLimitsOf = (row: LimitSetRow): FrozenLimits => ({
   effectiveFrom: row.effectiveFrom,
   frozenAt: row.frozenAt,
   leftOut: row.baseline.leftOut.map((lot) => lot.lotId),
+  ...(row.target === undefined ? {} : { target: row.target }),
+  ...(row.rules === undefined ? {} : { rules: row.rules }),
 })
 
 export type NewLimitSet = Omit<LimitSetRow, 'id' | 'baseline' | 'supersededAt' | 'frozenById'> & {
@@ -98,6 +126,8 @@ export async function insertLimitSet(tx: Tx, set: NewLimitSet): Promise<number> 
   const { id } = await tx.limitSet.create({
     data: {
       ...set,
+      target: set.target ?? null,
+      rules: set.rules === undefined ? null : set.rules.join(' '),
       lower: set.lower ?? null,
       upper: set.upper ?? null,
       effectiveFrom: new Date(set.effectiveFrom),

@@ -10,6 +10,8 @@ export interface LotRow {
   readonly version: number
   readonly evidenceChanged: boolean
   readonly madeAt: number
+  /** When the first of its readings was taken. */
+  readonly measuredAt: number | undefined
   readonly lengthMetres: number | undefined
   readonly setting: string
   readonly createdAt: number
@@ -35,6 +37,7 @@ const select = {
   version: true,
   evidenceChanged: true,
   madeAt: true,
+  measuredAt: true,
   lengthMetres: true,
   setting: true,
   createdAt: true,
@@ -49,10 +52,19 @@ const select = {
 interface Selected
   extends Omit<
     LotRow,
-    'state' | 'madeAt' | 'createdAt' | 'lengthMetres' | 'createdById' | 'makerId' | 'machine' | 'die'
+    | 'state'
+    | 'madeAt'
+    | 'measuredAt'
+    | 'createdAt'
+    | 'lengthMetres'
+    | 'createdById'
+    | 'makerId'
+    | 'machine'
+    | 'die'
   > {
   readonly state: string
   readonly madeAt: Date
+  readonly measuredAt: Date | null
   readonly createdAt: Date
   readonly lengthMetres: number | null
   readonly createdById: number | null
@@ -66,6 +78,7 @@ const rowOf = (row: Selected): LotRow => ({
   // The guard of the table allows no other word.
   state: row.state as LotState,
   madeAt: row.madeAt.getTime(),
+  measuredAt: row.measuredAt?.getTime(),
   createdAt: row.createdAt.getTime(),
   lengthMetres: row.lengthMetres ?? undefined,
   createdById: row.createdById ?? undefined,
@@ -125,12 +138,22 @@ export const insertLot = async (tx: Tx, lot: NewLot): Promise<LotRow> =>
 export const updateLotState = async (
   tx: Tx,
   lot: { readonly id: number; readonly version: number },
-  change: { readonly state: LotState; readonly evidenceChanged: boolean },
+  change: {
+    readonly state: LotState
+    readonly evidenceChanged: boolean
+    /** Epoch milliseconds. */
+    readonly measuredAt?: number
+  },
 ): Promise<boolean> =>
   (
     await tx.lot.updateMany({
       where: { id: lot.id, version: lot.version },
-      data: { ...change, version: { increment: 1 } },
+      data: {
+        state: change.state,
+        evidenceChanged: change.evidenceChanged,
+        ...(change.measuredAt === undefined ? {} : { measuredAt: new Date(change.measuredAt) }),
+        version: { increment: 1 },
+      },
     })
   ).count > 0
 

@@ -1,3 +1,4 @@
+import type { Tx } from './database'
 import { type EquipmentStore, inListOrder, searchKeyOf } from './equipment-store'
 
 export interface MachineValues {
@@ -34,4 +35,27 @@ export const machines: EquipmentStore<MachineRow, MachineValues> = {
   setActive: async (tx, code, version, active) =>
     (await tx.machine.updateMany({ where: { code, version }, data: { active, version: { increment: 1 } } }))
       .count > 0,
+}
+
+/** Ids of the machines that lots of a product were made on. */
+export const listMachinesOf = async (tx: Tx, productId: number): Promise<readonly number[]> =>
+  (
+    await tx.lot.groupBy({
+      by: ['machineId'],
+      where: { productId, machineId: { not: null } },
+      orderBy: { machineId: 'asc' },
+    })
+  ).flatMap(({ machineId }) => machineId ?? [])
+
+/** Codes and names by id. */
+export const listMachineNames = async (
+  tx: Tx,
+  ids: readonly number[],
+): Promise<ReadonlyMap<number, { readonly code: string; readonly name: string }>> => {
+  if (ids.length === 0) return new Map()
+  const rows = await tx.machine.findMany({
+    where: { id: { in: [...ids] } },
+    select: { id: true, code: true, name: true },
+  })
+  return new Map(rows.map(({ id, ...row }) => [id, row]))
 }

@@ -15,6 +15,8 @@ export interface SignalRow {
   readonly characteristic: string
   readonly statistic: string
   readonly limitSetId: number
+  /** Set when the pattern runs over several products of one machine. */
+  readonly machineId: number | undefined
   readonly limitSetNumber: number
   readonly rule: ControlRule
   readonly side: Side
@@ -38,6 +40,7 @@ const select = {
   characteristic: true,
   statistic: true,
   limitSetId: true,
+  machineId: true,
   rule: true,
   side: true,
   members: true,
@@ -62,6 +65,7 @@ interface Selected
     | 'productCode'
     | 'productName'
     | 'limitSetNumber'
+    | 'machineId'
     | 'rule'
     | 'side'
     | 'state'
@@ -74,6 +78,7 @@ interface Selected
   readonly side: string
   readonly state: string
   readonly members: string
+  readonly machineId: number | null
   readonly raisedAt: Date
   readonly answeredAt: Date | null
   readonly answeredById: number | null
@@ -88,6 +93,7 @@ const rowOf = ({ lot, product, limitSet, ...row }: Selected): SignalRow => ({
   productCode: product.code,
   productName: product.name,
   limitSetNumber: limitSet.number,
+  machineId: row.machineId ?? undefined,
   // The guards of the table allow no other words.
   rule: row.rule as ControlRule,
   side: row.side as Side,
@@ -98,11 +104,21 @@ const rowOf = ({ lot, product, limitSet, ...row }: Selected): SignalRow => ({
   answeredById: row.answeredById ?? undefined,
 })
 
-/** All signals of a product, newest first. */
+/** All signals of a product’s own charts, newest first. */
 export const listProductSignals = async (tx: Tx, productId: number): Promise<readonly SignalRow[]> =>
   (
     await tx.signal.findMany({
-      where: { productId },
+      where: { productId, machineId: null },
+      select,
+      orderBy: [{ raisedAt: 'desc' }, { id: 'desc' }],
+    })
+  ).map(rowOf)
+
+/** All signals of a machine’s charts over its products, newest first. */
+export const listMachineSignals = async (tx: Tx, machineId: number): Promise<readonly SignalRow[]> =>
+  (
+    await tx.signal.findMany({
+      where: { machineId },
       select,
       orderBy: [{ raisedAt: 'desc' }, { id: 'desc' }],
     })
@@ -139,10 +155,11 @@ export const storedSignalOf = (row: SignalRow): StoredSignal => ({
 
 /** Stores what the rules find now: what is new, and what becomes of what is kept. */
 export async function storeSignals(tx: Tx, charts: readonly SignalRows[]): Promise<void> {
-  const raised = charts.flatMap(({ productId, characteristic, statistic, raised: found }) =>
+  const raised = charts.flatMap(({ productId, machineId, characteristic, statistic, raised: found }) =>
     found.map(({ members, raisedAt, ...signal }) => ({
-      ...signal,
       productId,
+      ...signal,
+      machineId: machineId ?? null,
       characteristic,
       statistic,
       members: canonicalJson(members),

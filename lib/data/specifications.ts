@@ -51,6 +51,17 @@ const rowOf = ({ effectiveFrom, issuedAt, issuedById, material, ...row }: Select
   materialName: material.name,
 })
 
+/** What each revision of a product asks for, by the revision’s id. */
+export const listSpecificationBodies = async (
+  tx: Tx,
+  productId: number,
+): Promise<ReadonlyMap<number, SpecificationBody>> =>
+  new Map(
+    (await tx.specificationRevision.findMany({ where: { productId }, select: { id: true, body: true } })).map(
+      (row) => [row.id, specificationBodyOf(row)],
+    ),
+  )
+
 /** All revisions of a product, newest first. */
 export const listSpecificationRows = async (
   tx: Tx,

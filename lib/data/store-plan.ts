@@ -24,8 +24,8 @@ export async function storePlan(tx: Tx, plan: SpecimenWritePlan, equipment: Know
   await storeSignals(tx, plan.signals)
   await markDispositions(tx, plan.evidenceChanged.dispositions)
   await markRevisions(tx, plan.evidenceChanged.datasheetRevisions)
-  const { id, version, state, evidenceChanged } = plan.lot
-  if (!(await updateLotState(tx, { id, version: version - 1 }, { state, evidenceChanged })))
+  const { id, version, ...change } = plan.lot
+  if (!(await updateLotState(tx, { id, version: version - 1 }, change)))
     throw new Error(`lot ${id} is not at version ${version - 1}: its row was not locked before the plan`)
 }
 

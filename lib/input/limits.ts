@@ -17,6 +17,8 @@ const baseline = {
   firstLotCode: codeText('First lot').optional(),
   lastLotCode: codeText('Last lot').optional(),
   leftOut: z.array(leftOut).max(500).default([]),
+  /** Neighbouring lots are alike by nature; without it the lots themselves say so. */
+  alike: z.boolean().optional(),
 }
 
 export const proposeLimitsSchema = z.strictObject(baseline)

@@ -15,7 +15,7 @@ import { canonicalJson } from '@/lib/domain/record/canonical-json'
 import { limitsAt } from '@/lib/domain/record/chart-history'
 import { isCharted, type LotState, stateAfter } from '@/lib/domain/record/lot-state'
 import type { DecideLotInput } from '@/lib/input/decision'
-import { askRules } from './ask-rules'
+import { askMachineRules, askRules } from './ask-rules'
 import { changedMeanwhile } from './changed-meanwhile'
 import { type LoadedLot, loadLot } from './lot-assessment'
 
@@ -103,7 +103,10 @@ export async function decideLot(
     if (!(await updateLotState(tx, lot, { state, evidenceChanged: false })))
       throw changedMeanwhile(`Lot ${lot.code}`)
     // A lot that is decided before its plan is complete comes onto the charts now.
-    if (!isCharted(lot.state)) await askRules(tx, lot.product.id)
+    if (!isCharted(lot.state)) {
+      await askRules(tx, lot.product.id)
+      await askMachineRules(tx, lot.product.id)
+    }
     await appendLedger(tx, {
       at,
       personId: actor.personId,

@@ -13,7 +13,7 @@ import { characteristics } from '@/lib/domain/metrology/characteristics'
 import { canonicalJson } from '@/lib/domain/record/canonical-json'
 import { limitsAt } from '@/lib/domain/record/chart-history'
 import type { FreezeLimitsInput } from '@/lib/input/limits'
-import { askRules } from './ask-rules'
+import { askMachineRules, askRules } from './ask-rules'
 import type { DecisionEvidence } from './decide-lot'
 import { baselineOf, type ChosenLot, loadBaseline } from './limit-baseline'
 import { refusal } from './refusal'
@@ -54,11 +54,18 @@ export async function freezeLimits(
         mend: 'Load the page again and look at it first.',
       })
     const lots = await loadBaseline(tx, product.id, input)
-    const proposed = proposeLimits(lots, input.statistic, characteristics[input.characteristic].oneSided)
+    const proposed = proposeLimits(
+      lots,
+      input.statistic,
+      characteristics[input.characteristic].oneSided,
+      input.alike,
+    )
     if (!proposed.ok) throw refusal(proposed.problems)
     const effectiveFrom = input.effectiveFrom ?? usualBeginning(lots, number)
     await insertLimitSet(tx, rowOf(product, input, proposed.value, lots, number, effectiveFrom, actor, at))
-    const signals = await askRules(tx, product.id, isOf(input))
+    const own = await askRules(tx, product.id, isOf(input))
+    const over = await askMachineRules(tx, product.id, isOf(input))
+    const signals = { raised: own.raised + over.raised, gone: own.gone + over.gone }
     await markDecisions(tx, product.id, input, sets, effectiveFrom)
     await appendLedger(tx, {
       at,
@@ -74,6 +81,8 @@ export async function freezeLimits(
         lots: proposed.value.lotCount,
         leftOut: input.leftOut,
         effectiveFrom,
+        target: lots.at(-1)?.target,
+        rules: proposed.value.rules,
         reason: input.reason,
         signals,
       },
@@ -132,6 +141,8 @@ const rowOf = (
   frozenAt: at,
   frozenById: actor.personId,
   reason: input.reason,
+  target: lots.at(-1)?.target,
+  rules: proposal.rules,
 })
 
 /** Decisions on lots that another set of this chart held for until now rest on older evidence. */

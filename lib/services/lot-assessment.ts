@@ -1,7 +1,7 @@
 import type { Tx } from '@/lib/data/database'
 import { type KnownEquipment, type LoadedRevision, loadEquipment } from '@/lib/data/evaluation-facts'
 import type { LotRow } from '@/lib/data/lots'
-import { listProductSignals } from '@/lib/data/signals'
+import { listMachineSignals, listProductSignals } from '@/lib/data/signals'
 import { loadSpecimens, type StoredSpecimen } from '@/lib/data/specimens'
 import { assessLot, type LotAssessment } from '@/lib/domain/record/assess-lot'
 import { type CurrentSheet, currentSheet } from '@/lib/domain/record/current-sheet'
@@ -42,7 +42,12 @@ export async function loadLot(tx: Tx, lot: LotRow): Promise<LoadedLot> {
     ...one,
     current: currentSheet(one.readings),
   }))
-  const rows = (await listProductSignals(tx, lot.product.id)).filter((row) => row.members.includes(lot.id))
+  const rows = [
+    ...(await listProductSignals(tx, lot.product.id)),
+    ...(lot.machine ? await listMachineSignals(tx, lot.machine.id) : []),
+  ]
+    .filter((row) => row.members.includes(lot.id))
+    .sort((a, b) => b.raisedAt - a.raisedAt || b.id - a.id)
   const signals = await signalViews(tx, rows, works)
   return {
     works,

@@ -36,7 +36,7 @@ export async function proposeLimits(
   if (!product)
     throw problem('not-found', `There is no product ${input.productCode}.`, { where: 'productCode' })
   const lots = await loadBaseline(read, product.id, input)
-  const proposed = propose(lots, input.statistic, characteristics[input.characteristic].oneSided)
+  const proposed = propose(lots, input.statistic, characteristics[input.characteristic].oneSided, input.alike)
   const newest = (await listLimitSets(read, product.id))
     .filter((one) => one.characteristic === input.characteristic && one.statistic === input.statistic)
     .at(-1)

@@ -22,7 +22,7 @@ import { evaluateStored, inputsOf } from '@/lib/domain/record/evaluate-stored'
 import { summaryRows } from '@/lib/domain/record/plan-lot-outcome'
 import { type ResultRow, resultRow, resultsOf } from '@/lib/domain/record/result-row'
 import { summariseSpecimens } from '@/lib/domain/record/summarise-specimens'
-import { askRules } from './ask-rules'
+import { askMachineRules, askRules } from './ask-rules'
 
 export interface Recomputation {
   readonly lots: number
@@ -129,5 +129,7 @@ const isSameRow = (a: ResultRow, b: ResultRow | undefined): boolean =>
 
 async function recomputeSignals(tx: Tx, productId: number) {
   await lockRow(tx, 'Product', productId)
-  return askRules(tx, productId)
+  const own = await askRules(tx, productId)
+  const over = await askMachineRules(tx, productId)
+  return { raised: own.raised + over.raised, changed: own.changed + over.changed }
 }

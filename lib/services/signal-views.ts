@@ -1,6 +1,7 @@
 import { isCharacteristic, statisticOf } from '@/lib/data/chart-histories'
 import type { Tx } from '@/lib/data/database'
 import { listLotCodes } from '@/lib/data/lots'
+import { listMachineNames } from '@/lib/data/machines'
 import { listPersonNames } from '@/lib/data/people-names'
 import type { SignalRow } from '@/lib/data/signals'
 import type { ControlRule } from '@/lib/domain/control/find-signals'
@@ -25,6 +26,8 @@ export interface SignalView {
   readonly characteristic: CharacteristicId
   readonly statistic: ChartedStatistic
   readonly chartName: string
+  /** Set when the pattern runs over several products of one machine; the departure is then in σ. */
+  readonly machine: { readonly code: string; readonly name: string } | undefined
   readonly rule: ControlRule
   readonly side: Side
   readonly departure: number
@@ -50,16 +53,18 @@ export async function signalViews(
     tx,
     rows.flatMap((row) => row.answeredById ?? []),
   )
+  const machines = await listMachineNames(tx, [...new Set(rows.flatMap((row) => row.machineId ?? []))])
   return rows.flatMap((row): SignalView[] => {
     if (!isCharacteristic(row.characteristic)) return []
     const { characteristic } = row
     const statistic = statisticOf(row.statistic)
+    const machine = row.machineId === undefined ? undefined : machines.get(row.machineId)
     const memberCodes = row.members.map((id) => codes.get(id) ?? '')
     return [
       {
         id: row.id,
         sentence: signalSentence(
-          { ...row, characteristic, statistic, memberCodes },
+          { ...row, characteristic, statistic, memberCodes, machineName: machine?.name },
           works.units,
           works.numberFormat,
         ),
@@ -71,6 +76,7 @@ export async function signalViews(
         characteristic,
         statistic,
         chartName: chartName(characteristic, statistic),
+        machine,
         rule: row.rule,
         side: row.side,
         departure: row.departure,

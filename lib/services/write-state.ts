@@ -1,4 +1,4 @@
-import { loadChartHistories } from '@/lib/data/chart-histories'
+import { loadChartHistories, loadMachineCharts } from '@/lib/data/chart-histories'
 import type { Tx } from '@/lib/data/database'
 import { findCurrentDisposition, unmarkedRevisionsOf } from '@/lib/data/dispositions'
 import { type KnownEquipment, loadEquipment } from '@/lib/data/evaluation-facts'
@@ -10,16 +10,26 @@ import { loadFacts } from './evaluation-facts'
 
 /**
  * Everything that the plan of a further entry rests on. Call it with the lot's row locked; the product's row is
- * locked here, because two lots of one product may raise the same signal.
+ * locked here, because two lots of one product may raise the same signal, and its machine's for the same reason.
  */
 export async function loadWriteState(
   tx: Tx,
   lot: LotRow,
 ): Promise<{ readonly state: LotWriteState; readonly equipment: KnownEquipment }> {
   await lockRow(tx, 'Product', lot.product.id)
+  if (lot.machine) await lockRow(tx, 'Machine', lot.machine.id)
+  return readWriteState(tx, lot)
+}
+
+/** The same without locks: for whoever makes sure in another way that nothing changes meanwhile. */
+export async function readWriteState(
+  tx: Tx,
+  lot: LotRow,
+): Promise<{ readonly state: LotWriteState; readonly equipment: KnownEquipment }> {
   const equipment = await loadEquipment(tx)
   const { facts } = await loadFacts(tx, lot.specificationRevisionId, equipment)
   const specimens = await loadSpecimens(tx, lot.id, equipment)
+  const charts = await loadChartHistories(tx, lot.product.id)
   const disposition = await findCurrentDisposition(tx, lot.id)
   return {
     equipment,
@@ -33,10 +43,15 @@ export async function loadWriteState(
         productId: lot.product.id,
         machineId: lot.machine?.id ?? null,
         madeAt: lot.madeAt,
+        ...(lot.measuredAt === undefined ? {} : { measuredAt: lot.measuredAt }),
       },
       facts,
       specimens: specimens.map(specimenStateOf),
-      charts: await loadChartHistories(tx, lot.product.id),
+      charts,
+      // Nothing is asked over products while the lot's own product has no limits.
+      ...(lot.machine && charts.length > 0
+        ? { machine: await loadMachineCharts(tx, lot.machine.id, lot.product.id) }
+        : {}),
       ...(disposition === undefined
         ? {}
         : {

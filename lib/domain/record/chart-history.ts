@@ -13,6 +13,9 @@ export interface ChartPoint {
   /** Epoch milliseconds. */
   readonly madeAt: number
   readonly value: number
+  /** What the specification asks of this lot, where it asks for a target; SI. */
+  readonly target?: number
+  readonly machineId?: number
   /** When the newest of the evaluations that the value rests on was made, epoch milliseconds. */
   readonly evaluatedAt: number
 }
@@ -30,6 +33,10 @@ export interface FrozenLimits {
   readonly frozenAt: number
   /** Lots that were left out of the baseline, each for a reason. */
   readonly leftOut: readonly number[]
+  /** What the specification asked for when the baseline was made, SI. */
+  readonly target?: number
+  /** Rules that are asked; all of them when not said. */
+  readonly rules?: readonly ControlRule[]
 }
 
 /** A pattern that a rule finds on a chart. */
@@ -41,7 +48,7 @@ export interface Departure {
   readonly lotId: number
   /** All lots of the pattern, in chart order. */
   readonly members: readonly number[]
-  /** Mean distance of the members from the centre, SI. */
+  /** Mean distance of the members from the centre: SI; over several products in σ. */
   readonly departure: number
 }
 
@@ -63,6 +70,13 @@ export interface ChartHistory {
   readonly limitSets: readonly FrozenLimits[]
   readonly signals: readonly StoredSignal[]
 }
+
+/**
+ * How far the limits of a set lie off for a lot, SI: a target that a specification moved takes centre and limits
+ * along, as the process is set to the new one; its spread stays. Nothing where either has no target.
+ */
+export const targetShift = (set: Pick<FrozenLimits, 'target'>, lot: Pick<ChartPoint, 'target'>): number =>
+  set.target === undefined || lot.target === undefined ? 0 : lot.target - set.target
 
 /** Chart order: time made, then code by UTF-16 code units, alike on every engine. */
 export const inChartOrder = (

@@ -1,12 +1,9 @@
 import { type CharacteristicId, characteristicIds } from '../metrology/characteristics'
 import { MODEL_VERSION } from '../metrology/model-version'
-import { chartDepartures } from './chart-departures'
-import type { ChartHistory, ChartPoint } from './chart-history'
-import { chartValue } from './chart-value'
 import { currentSheet } from './current-sheet'
-import { isCharted, type LotState, stateAfterEntry } from './lot-state'
+import { type LotState, stateAfterEntry } from './lot-state'
 import { planProgress } from './plan-progress'
-import { reconcileSignals } from './reconcile-signals'
+import { planSignals } from './plan-signals'
 import { type LotSummaries, summariseSpecimens } from './summarise-specimens'
 import type { LotRowChange, SignalRows, SpecimenWritePlan, SummaryRow } from './write-plan'
 import type { LotWriteState, SpecimenState } from './write-state'
@@ -19,7 +16,11 @@ export interface LotOutcome {
 }
 
 /** What a lot comes to when its specimens stand as given: state, summaries, signals, marks on older evidence. */
-export function planLotOutcome(state: LotWriteState, specimens: readonly SpecimenState[]): LotOutcome {
+export function planLotOutcome(
+  state: LotWriteState,
+  specimens: readonly SpecimenState[],
+  measuredAt: number | undefined = state.lot.measuredAt,
+): LotOutcome {
   const summaries = summariseSpecimens(
     specimens.flatMap(({ number, evaluation }) =>
       evaluation ? [{ number, results: evaluation.results }] : [],
@@ -35,11 +36,10 @@ export function planLotOutcome(state: LotWriteState, specimens: readonly Specime
       // A lot that comes back from rework is judged anew: its old decision is no longer what it stands by.
       evidenceChanged: lotState === 'to-decide' ? false : state.lot.evidenceChanged || (decided && changed),
       version: state.lot.version + 1,
+      ...(measuredAt === undefined ? {} : { measuredAt }),
     },
     summaries: summaryRows(state, summaries),
-    signals: state.charts.flatMap((chart) =>
-      signalsOf(state, chart, lotState, summaries, specimens, changed),
-    ),
+    signals: planSignals(state, { lotState, summaries, specimens, changed }),
     evidenceChanged: {
       dispositions:
         changed && state.disposition && !state.disposition.evidenceChanged ? [state.disposition.id] : [],
@@ -88,37 +88,3 @@ export const summaryRows = (
         ]
       : []
   })
-
-function signalsOf(
-  { lot }: LotWriteState,
-  chart: ChartHistory,
-  lotState: LotState,
-  summaries: LotSummaries,
-  specimens: readonly SpecimenState[],
-  changed: boolean,
-): readonly SignalRows[] {
-  const others = chart.points.filter((point) => point.lotId !== lot.id)
-  const value = chartValue(chart.statistic, summaries[chart.characteristic])
-  const point: ChartPoint | undefined =
-    value === undefined || !isCharted(lotState)
-      ? undefined
-      : {
-          lotId: lot.id,
-          code: lot.code,
-          madeAt: lot.madeAt,
-          value,
-          evaluatedAt: Math.max(...specimens.map((one) => one.evaluation?.at ?? 0)),
-        }
-  const found = chartDepartures({ ...chart, points: point ? [...others, point] : others })
-  const { raised, changed: changes } = reconcileSignals(found, chart.signals, changed ? lot.id : undefined)
-  if (raised.length === 0 && changes.length === 0) return []
-  return [
-    {
-      productId: lot.productId,
-      characteristic: chart.characteristic,
-      statistic: chart.statistic,
-      raised,
-      changed: changes,
-    },
-  ]
-}

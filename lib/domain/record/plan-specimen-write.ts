@@ -63,7 +63,7 @@ export function planSpecimenWrite(
   const alreadyThere = admitted.flatMap(({ entry, admission }) =>
     admission.kind === 'already-there' ? [entry.specimen.number] : [],
   )
-  const outcome = planLotOutcome(state, afterEntries(state, touched))
+  const outcome = planLotOutcome(state, afterEntries(state, touched), firstMeasured(state, touched))
   return ok({
     lot: outcome.lot,
     specimens: touched.flatMap(({ isNew, after }) => (isNew ? [specimenRow(state, after, at)] : [])),
@@ -151,6 +151,13 @@ function touch(
       evaluation,
     },
   }
+}
+
+/** When the first reading of the lot was taken, as far as anything has been read. */
+function firstMeasured(state: LotWriteState, touched: readonly Touched[]): number | undefined {
+  const times = [state.lot.measuredAt, ...touched.map(({ entry }) => entry.reading.measuredAt)]
+  const known = times.flatMap((at) => at ?? [])
+  return known.length === 0 ? undefined : Math.min(...known)
 }
 
 /** The specimens of the lot as they stand after the entries. */

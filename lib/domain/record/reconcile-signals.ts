@@ -1,7 +1,11 @@
 import type { Departure, StoredSignal } from './chart-history'
 
 /** A signal that is raised anew. */
-export type RaisedSignal = Departure & { readonly raisedAt: number }
+export type RaisedSignal = Departure & {
+  readonly raisedAt: number
+  /** Of the lot that completed it, where lots of several products make it. */
+  readonly productId?: number
+}
 
 /** What a signal that is already kept comes to. */
 export type SignalChange = Pick<

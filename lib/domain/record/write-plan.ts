@@ -35,6 +35,8 @@ export interface LotRowChange {
   readonly state: LotState
   readonly evidenceChanged: boolean
   readonly version: number
+  /** When the first of its readings was taken; undefined before there is any. */
+  readonly measuredAt?: number
 }
 
 export interface SpecimenRow {
@@ -96,7 +98,10 @@ export interface SummaryRow extends LotSummaryBody {
 }
 
 export interface SignalRows {
+  /** Of the lots of the chart; on a machine’s chart of the lot that was written, and each signal names its own. */
   readonly productId: number
+  /** Set for the chart of a machine over its products. */
+  readonly machineId?: number
   readonly characteristic: CharacteristicId
   readonly statistic: ChartedStatistic
   readonly raised: readonly RaisedSignal[]

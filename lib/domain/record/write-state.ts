@@ -1,5 +1,6 @@
+import type { CharacteristicId } from '../metrology/characteristics'
 import type { EvaluationContext, SpecimenEvaluation } from '../metrology/evaluation'
-import type { ChartHistory } from './chart-history'
+import type { ChartedStatistic, ChartHistory, StoredSignal } from './chart-history'
 import type { EvaluationFacts } from './evaluation-facts'
 import type { LotState } from './lot-state'
 import type { EquipmentCodes, ReadingFact, ReadingKind, SheetPart } from './reading'
@@ -15,11 +16,19 @@ export interface LotWriteState {
     readonly productId: number
     readonly machineId: number | null
     readonly madeAt: number
+    /** When the first of its readings was taken. */
+    readonly measuredAt?: number
   }
   readonly facts: EvaluationFacts
   readonly specimens: readonly SpecimenState[]
   /** Charts of the product that have a limit set; the lot itself may be among the points or not. */
   readonly charts: readonly ChartHistory[]
+  /** Charts of the other products that the lot’s machine makes, and the signals of the machine’s own chart. */
+  readonly machine?: {
+    readonly id: number
+    readonly products: readonly { readonly productId: number; readonly charts: readonly ChartHistory[] }[]
+    readonly signals: readonly MachineSignals[]
+  }
   /** The decision in force. */
   readonly disposition?: {
     readonly id: number
@@ -28,6 +37,13 @@ export interface LotWriteState {
   }
   /** Published revisions that rest on this lot and are not marked yet. */
   readonly datasheetRevisions: readonly number[]
+}
+
+/** Signals kept for one chart of a machine. */
+export interface MachineSignals {
+  readonly characteristic: CharacteristicId
+  readonly statistic: ChartedStatistic
+  readonly signals: readonly StoredSignal[]
 }
 
 export interface SpecimenState {

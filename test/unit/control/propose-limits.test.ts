@@ -109,3 +109,36 @@ describe('proposeLimits(lots, statistic, oneSided)', () => {
     )
   })
 })
+
+describe('proposeLimits(…) where neighbouring lots are alike', () => {
+  /** Slow waves: each value close to the one before. */
+  const slow = Array.from({ length: 48 }, (_, index) => 10 + Math.sin(index / 4))
+
+  it('takes the spread from all lots and asks for no runs, by itself, and says so', () => {
+    const proposal = proposeLimits(lots(slow), 'mean', false)
+    if (!proposal.ok) throw new Error('refused')
+    const { advice, alike, rules, sigma, sigmaEstimator } = proposal.value
+    expect({ alike, rules, sigmaEstimator }).toEqual({
+      alike: true,
+      rules: ['beyond-the-limits'],
+      sigmaEstimator: 'overall standard deviation',
+    })
+    const mean = slow.reduce((sum, value) => sum + value, 0) / slow.length
+    const squares = slow.reduce((sum, value) => sum + (value - mean) ** 2, 0)
+    expect(sigma).toBeCloseTo(Math.sqrt(squares / 47), 12)
+    expect(advice[0]).toContain('would be too narrow and cry wolf')
+    expect(advice[1]).toContain('runs on one side are not asked for')
+  })
+
+  it('leaves it to a person to say otherwise', () => {
+    const proposal = proposeLimits(lots(slow), 'mean', false, false)
+    expect(proposal).toMatchObject({
+      ok: true,
+      value: {
+        alike: false,
+        rules: ['beyond-the-limits', 'nine-on-one-side'],
+        sigmaEstimator: 'moving-range mean',
+      },
+    })
+  })
+})

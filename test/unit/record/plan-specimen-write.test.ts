@@ -59,7 +59,13 @@ describe('planSpecimenWrite: a first entry', () => {
   })
 
   it('leaves a lot measuring while its plan is incomplete', () => {
-    expect(plan.lot).toEqual({ id: 354, state: 'measuring', evidenceChanged: false, version: 2 })
+    expect(plan.lot).toEqual({
+      id: 354,
+      state: 'measuring',
+      evidenceChanged: false,
+      version: 2,
+      measuredAt: 1000,
+    })
   })
 
   it('drafts one ledger entry that names every reading by its hash', () => {

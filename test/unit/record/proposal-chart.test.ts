@@ -20,6 +20,8 @@ const proposal: LimitProposal = {
   lower: 394.7e-6,
   upper: 401.9e-6,
   sigmaEstimator: 'moving-range mean',
+  rules: ['beyond-the-limits', 'nine-on-one-side'],
+  alike: false,
   lotCount: 23,
   provisional: true,
   beyond: [],
