@@ -1,11 +1,36 @@
 import { z } from 'zod'
-import { lotStates } from '@/lib/domain/record/lot-state'
+import { lotMaterialRoles } from '@/lib/domain/record/material-in'
 import { instant } from './instant'
-import { codeText, plainText } from './plain-text'
+import { codeText, paragraphs, plainText } from './plain-text'
 import { clientId } from './specimen'
 
-/** Lots on one page of the list. */
-export const LOTS_A_PAGE = 50
+/** Longest lot, and so the furthest place along one, metres. */
+export const MOST_LOT_METRES = 10_000_000
+
+const metreOf = (name: string) =>
+  z
+    .number({ error: `${name} is a number of metres.` })
+    .min(0, { error: `${name} is at least 0 m.` })
+    .max(MOST_LOT_METRES, { error: `${name} is at most 10 000 km.` })
+    .optional()
+
+/** A coil, spool or resin batch that went into the lot, and where along it when there was a splice. */
+export const lotMaterialSchema = z
+  .strictObject({
+    role: z.enum(lotMaterialRoles, { error: 'Role is core, wrap-1, wrap-2 or resin.' }),
+    code: codeText('Coil, spool or batch'),
+    fromMetre: metreOf('From'),
+    toMetre: metreOf('To'),
+  })
+  .refine(
+    ({ fromMetre, toMetre }) => fromMetre === undefined || toMetre === undefined || fromMetre < toMetre,
+    { error: 'The place where it begins has to lie before the place where it ends.', path: ['toMetre'] },
+  )
+
+/** In the order in which they follow each other along the lot. */
+export const lotMaterialsSchema = z
+  .array(lotMaterialSchema)
+  .max(20, { error: 'A lot is made of at most 20 coils, spools and batches.' })
 
 export const openLotSchema = z.strictObject({
   /** Makes opening safe to repeat. */
@@ -18,19 +43,21 @@ export const openLotSchema = z.strictObject({
   lengthMetres: z
     .number({ error: 'Length of the lot is a number of metres.' })
     .gt(0, { error: 'Length of the lot is more than 0 m.' })
-    .max(10_000_000, { error: 'Length of the lot is at most 10 000 km.' })
+    .max(MOST_LOT_METRES, { error: 'Length of the lot is at most 10 000 km.' })
     .optional(),
   setting: plainText('Setting', { min: 0, max: 200 }).default(''),
   /** Number of the specification revision on the traveller; without it the one in force when it was made. */
   revision: z.int().min(1).optional(),
+  materials: lotMaterialsSchema.default([]),
 })
 
-export const listLotsSchema = z.strictObject({
-  search: plainText('Search', { min: 0, max: 80 }).default(''),
-  state: z.enum(lotStates).optional(),
-  productCode: codeText('Product').optional(),
-  page: z.coerce.number().int().min(1).max(100_000).default(1),
+export const changeLotMaterialsSchema = z.strictObject({
+  /** The version of the lot that was on the screen. */
+  lotVersion: z.int().min(1),
+  /** All of them: they take the place of those that are named now. */
+  materials: lotMaterialsSchema,
+  reason: paragraphs('Reason', { min: 3, max: 500 }),
 })
 
-export type OpenLotInput = z.output<typeof openLotSchema>
-export type ListLotsInput = z.output<typeof listLotsSchema>
+export type OpenLotInput = Omit<ParsedOpenLot, 'materials'> & Partial<Pick<ParsedOpenLot, 'materials'>>
+export type ChangeLotMaterialsInput = z.output<typeof changeLotMaterialsSchema>

@@ -4,12 +4,14 @@ import { database, type Tx } from '@/lib/data/database'
 import { dies } from '@/lib/data/dies'
 import { appendLedger } from '@/lib/data/ledger'
 import { lockRow } from '@/lib/data/locks'
+import { insertLotMaterials } from '@/lib/data/lot-materials'
 import { findLotByCode, insertLot } from '@/lib/data/lots'
 import { machines } from '@/lib/data/machines'
 import { findProductByCode, type ProductRow } from '@/lib/data/products'
 import { findSpecification, findSpecificationInForce, type SpecificationRow } from '@/lib/data/specifications'
 import { problem } from '@/lib/domain/errors'
 import type { OpenLotInput } from '@/lib/input/lot'
+import { lotMaterialLinks } from './lot-material-links'
 import { once } from './once'
 
 export interface OpenedLot {
@@ -22,8 +24,9 @@ export interface OpenedLot {
 /**
  * Opens a lot for measuring. Its specification revision is fixed: the one on the traveller, else the one in
  * force when it was made.
- * @throws LedgerlineError not-permitted, not-found (product, machine, die, revision), not-ready (no specification
- *   in force), conflict (the code is taken)
+ * @throws LedgerlineError not-permitted, not-found (product, machine, die, revision, coil, spool, batch),
+ *   not-ready (no specification in force), conflict (the code is taken), bad-input (a material that does not fit
+ *   its role, or is put away)
  */
 export async function openLot(
   actor: Actor | undefined,
@@ -79,7 +82,8 @@ async function openOnce(
   const die = input.dieCode === undefined ? undefined : await dies.get(tx, input.dieCode)
   if (input.dieCode !== undefined && !die)
     throw problem('not-found', `There is no die ${input.dieCode}.`, { where: 'dieCode' })
-  await insertLot(tx, {
+  const links = await lotMaterialLinks(tx, input.materials ?? [], { lengthMetres: input.lengthMetres })
+  const lot = await insertLot(tx, {
     code: input.code,
     product,
     specificationRevisionId: revision.id,
@@ -92,6 +96,7 @@ async function openOnce(
     at,
     personId: actor.personId,
   })
+  await insertLotMaterials(tx, lot.id, links)
   return { code: input.code, productCode: product.code, revision: revision.number }
 }
 
