@@ -59,5 +59,8 @@ export const changeLotMaterialsSchema = z.strictObject({
   reason: paragraphs('Reason', { min: 3, max: 500 }),
 })
 
+export type LotMaterialInput = z.output<typeof lotMaterialSchema>
+type ParsedOpenLot = z.output<typeof openLotSchema>
+/** A program that opens lots may leave out what they are made of. */
 export type OpenLotInput = Omit<ParsedOpenLot, 'materials'> & Partial<Pick<ParsedOpenLot, 'materials'>>
 export type ChangeLotMaterialsInput = z.output<typeof changeLotMaterialsSchema>
