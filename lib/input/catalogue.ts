@@ -27,7 +27,8 @@ import {
 import { codeText, paragraphs, plainText } from './plain-text'
 
 export const materialKinds = ['metal', 'polymer', 'gut'] as const
-export const constructions = ['plain'] as const
+export const constructions = ['plain', 'wound'] as const
+export const coreShapes = ['round', 'hex'] as const
 export const tensionBases = [
   'unloaded-mass',
   'loaded-mass',
@@ -230,10 +231,43 @@ function planField(fields: FormFields): Result<SpecificationBody['plan']> {
   })
 }
 
+/** Nothing chosen and nothing typed: a plain string. */
+function coreField(fields: FormFields): Result<SpecificationBody['core']> {
+  const [shape, size] = [fields.coreShape ?? '', fields.coreSize ?? ''].map((text) => text.trim())
+  if (!shape && !size) return ok(undefined)
+  const read = collect({
+    shape: choiceField(fields, 'coreShape', 'Shape of the core', coreShapes),
+    size: quantityField(fields, 'coreSize', length('Size of the core', 'mm', 2e-5, 0.01)),
+  })
+  if (!read.ok) return read
+  return ok({ shape: read.value.shape, size: metres(read.value.size) })
+}
+
+/** What a core asks of the rest: it lies inside the string, and the wraps’ mass can’t be reckoned from a density. */
+function coreProblem(core: SpecificationBody['core'], diameter: number, mass: number | undefined) {
+  if (!core) return undefined
+  if (core.size >= diameter)
+    return {
+      code: 'bad-input' as const,
+      message: 'The core is as thick as the whole string.',
+      where: 'coreSize',
+      mend: 'Give the diameter of the core, or across flats of a hexagonal one; leave it empty for a plain string.',
+    }
+  if (mass === undefined)
+    return {
+      code: 'bad-input' as const,
+      message: 'A wound string needs its mass per metre.',
+      where: 'massPerMetre',
+      mend: 'Type it: it follows from core, wrap and lay, not from diameter and density alone.',
+    }
+  return undefined
+}
+
 /** The form that issues a specification revision; typed diameters without a unit are in the works' unit. */
 export function parseSpecification(fields: FormFields, diameterUnit: UnitId): Result<SpecificationInput> {
   const read = collect({
     materialCode: textField(fields, 'materialCode', codeText('Material', 40)),
+    core: coreField(fields),
     effectiveDay: dayField(fields, 'effectiveDay', 'In force from'),
     note: textField(fields, 'note', paragraphs('What changed', { min: 0, max: 500 })),
     diameter: quantityField(fields, 'diameter', length('Diameter', diameterUnit, 2e-5, 0.01)),
@@ -267,12 +301,15 @@ export function parseSpecification(fields: FormFields, diameterUnit: UnitId): Re
     plan: planField(fields),
   })
   if (!read.ok) return read
-  const { materialCode, effectiveDay, note, mass, guardDiameter, guardMass, plan, ...rest } = read.value
+  const { core, materialCode, effectiveDay, note, mass, guardDiameter, guardMass, plan, ...rest } = read.value
+  const wrong = coreProblem(core, rest.diameter, mass)
+  if (wrong) return refused(wrong)
   return ok({
     materialCode,
     effectiveDay,
     note,
     draft: {
+      ...(core ? { core } : {}),
       diameter: { target: metres(rest.diameter), tolerance: metres(rest.diameterTolerance) },
       massPerMetre: {
         ...(mass === undefined ? {} : { target: kilogramsPerMetre(mass) }),

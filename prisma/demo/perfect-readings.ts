@@ -1,15 +1,15 @@
 import { STEEL_EXPANSION } from '@/lib/domain/metrology/model-facts'
 import { airDensity } from '@/lib/domain/strings/air-density'
 import { airViscosity } from '@/lib/domain/strings/air-viscosity'
+import type { Core } from '@/lib/domain/strings/core-section'
 import { deadWeightForce, hangingStringForce } from '@/lib/domain/strings/dead-weight-force'
 import type { EndCondition } from '@/lib/domain/strings/end-condition'
-import { solidWireMassPerMetre } from '@/lib/domain/strings/round-section'
+import { loadBearingSection } from '@/lib/domain/strings/load-bearing'
 import { soundedFundamental } from '@/lib/domain/strings/sounding-forward'
-import { plainWireAxialStiffness, plainWireBendingStiffness } from '@/lib/domain/strings/stiffness'
+import { axialStiffness, bendingStiffness } from '@/lib/domain/strings/stiffness'
 import {
   degreesCelsius,
   kilograms,
-  kilogramsPerCubicMetre,
   kilogramsPerMetre,
   metres,
   metresPerSecondSquared,
@@ -17,12 +17,19 @@ import {
   pascals,
 } from '@/lib/domain/units/quantity'
 
-/** A plain steel string as it is, at 20 °C and unloaded, SI. */
+/** A string as it is, at 20 °C and unloaded, SI. */
 export interface TrueString {
+  /** Outer diameter. */
   readonly diameter: number
-  readonly density: number
+  readonly massPerMetre: number
+  /** What bears the load of a wound string; a plain one has none. */
+  readonly core?: Core
+  /** Of what bears the load. */
   readonly modulus: number
-  readonly expansion: number
+  /** Along the string; none where a bulk expansion does not hold (polymers). */
+  readonly expansion?: number
+  /** What the piece displaces air with. */
+  readonly density: number
 }
 
 /** Where and on what it is measured, SI. Lengths are those that rule and rig show, true at 20 °C. */
@@ -38,6 +45,8 @@ export interface Bench {
   readonly span: number
   readonly endCondition: EndCondition
   readonly cutLength: number
+  /** Cut slack, or at marks made under the load. */
+  readonly weighedState: 'slack' | 'marked'
 }
 
 export interface PerfectReadings {
@@ -48,18 +57,20 @@ export interface PerfectReadings {
 
 /**
  * What hands and instruments without any error read on a string: the domain's own chain backwards, step by
- * step: expansion, buoyancy of the piece, weights in air, stretch, ends, air that moves along.
+ * step: expansion, buoyancy of the piece, weights in air, stretch, ends, air that moves along. A wound string
+ * stretches and bends by its core; a piece marked under load weighs what the stretched string does.
  */
 export function perfectReadings(string: TrueString, bench: Bench): PerfectReadings {
   const away = bench.celsius - 20
   const steel = 1 + STEEL_EXPANSION * away
-  const grown = 1 + string.expansion * away
+  const grown = 1 + (string.expansion ?? 0) * away
   const air = { temperature: degreesCelsius(bench.celsius), pressure: pascals(101325), humidity: 0.5 }
   const density = airDensity(air)
   const diameter = metres(string.diameter)
   const modulus = pascals(string.modulus)
-  const at20 = solidWireMassPerMetre(diameter, kilogramsPerCubicMetre(string.density))
-  const perMetre = kilogramsPerMetre(at20 / grown)
+  const bearing = loadBearingSection(string.core, diameter)
+  const stiffness = axialStiffness(modulus, bearing.area)
+  const perMetre = kilogramsPerMetre(string.massPerMetre / grown)
   const gravity = metresPerSecondSquared(bench.gravity)
   const weights = deadWeightForce(kilograms(bench.hangingMass), gravity, density)
   const below = hangingStringForce(
@@ -67,24 +78,24 @@ export function perfectReadings(string: TrueString, bench: Bench): PerfectReadin
     metres(bench.hangingLength),
     gravity,
   )
+  const force = newtons((weights + below) * (1 + bench.pull))
   const frequency = soundedFundamental(
     {
-      force: newtons((weights + below) * (1 + bench.pull)),
+      force,
       span: metres(bench.span * steel),
       endCondition: bench.endCondition,
-      axialStiffness: plainWireAxialStiffness(modulus, diameter),
-      bendingStiffness: plainWireBendingStiffness(modulus, diameter),
+      axialStiffness: stiffness,
+      bendingStiffness: bendingStiffness(modulus, bearing.secondMoment),
       outerDiameter: diameter,
       air: { density, viscosity: airViscosity(air.temperature, density) },
     },
     perMetre,
   )
+  const weighed = bench.weighedState === 'slack' ? perMetre : perMetre / (1 + force / stiffness)
   return {
-    diameter: diameter / (1 - (string.expansion - STEEL_EXPANSION) * away),
-    // The balance is adjusted with weights of 8000 kg/m³; the piece is as dense as the handbook says.
-    cutMass: (perMetre * bench.cutLength * steel * (1 - density / HANDBOOK_DENSITY)) / (1 - density / 8000),
+    diameter: diameter / (1 - ((string.expansion ?? STEEL_EXPANSION) - STEEL_EXPANSION) * away),
+    // The balance is adjusted with weights of 8000 kg/m³.
+    cutMass: (weighed * bench.cutLength * steel * (1 - density / string.density)) / (1 - density / 8000),
     frequency,
   }
 }
-
-const HANDBOOK_DENSITY = 7850

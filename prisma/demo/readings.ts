@@ -1,6 +1,7 @@
 import type { SpecimenSheet, TypedValue } from '@/lib/domain/metrology/sheet'
 import { localGravity } from '@/lib/domain/strings/normal-gravity'
-import { degreesCelsius, hertz, kilograms, metres } from '@/lib/domain/units/quantity'
+import { solidWireMassPerMetre } from '@/lib/domain/strings/round-section'
+import { degreesCelsius, hertz, kilograms, kilogramsPerCubicMetre, metres } from '@/lib/domain/units/quantity'
 import { toSi, type UnitId } from '@/lib/domain/units/unit'
 import { demoRig, demoWeights, demoWorks } from './equipment'
 import { type Bench, perfectReadings, type TrueString } from './perfect-readings'
@@ -69,7 +70,8 @@ export function readLot(product: DemoProduct, lot: DemoSchedule): readonly Speci
 
 const trueString = (diameter: number, density: number): TrueString => ({
   diameter,
-  density,
+  massPerMetre: solidWireMassPerMetre(metres(diameter), kilogramsPerCubicMetre(density)),
+  density: 7850,
   modulus: 206e9,
   expansion: 11.5e-6,
 })
@@ -84,6 +86,7 @@ const benchOf = ({ specification }: DemoProduct, lot: TrueLot, friction: number,
   span: demoRig.spanMetres,
   endCondition: demoRig.endCondition,
   cutLength: cut,
+  weighedState: 'slack',
 })
 
 function readSpecimen(

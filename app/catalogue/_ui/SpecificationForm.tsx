@@ -55,6 +55,26 @@ export function SpecificationForm({ product, works, materials, rigs, today }: Sp
             value={newest?.materialCode}
             options={materials.map(({ code, name }) => ({ value: code, label: name }))}
           />
+          <SelectField
+            name="coreShape"
+            label="Core"
+            hint="What bears the load of a wound string, of the material above."
+            none="none: a plain string"
+            value={body?.core?.shape}
+            options={[
+              { value: 'round', label: 'round' },
+              { value: 'hex', label: 'hexagonal' },
+            ]}
+            optional
+          />
+          <NumberField
+            name="coreSize"
+            label="Size of the core"
+            hint="Its diameter, or across flats."
+            unit="mm"
+            value={typed(body?.core?.size, 'mm')}
+            optional
+          />
           <NumberField
             name="diameter"
             label="Diameter"
@@ -76,8 +96,9 @@ export function SpecificationForm({ product, works, materials, rigs, today }: Sp
           <NumberField
             name="massPerMetre"
             label="Mass per metre"
-            hint="Left empty it follows from diameter and density."
+            hint="Left empty it follows from diameter and density; of a wound string it has to be given."
             unit="mg/m"
+            value={typed(body?.core && body.massPerMetre.target, 'mg/m')}
             optional
           />
           <NumberField

@@ -1,7 +1,7 @@
 import { basisNames } from '@/lib/domain/datasheets/tension-by-basis'
 import { guardFactorOf } from '@/lib/domain/quality/tolerances'
+import { loadBearingSection } from '@/lib/domain/strings/load-bearing'
 import type { MaterialBody } from '@/lib/domain/strings/material'
-import { roundArea } from '@/lib/domain/strings/round-section'
 import {
   breakingLoad,
   CAUTION_FRACTION,
@@ -33,6 +33,20 @@ export function SpecificationView({ specification, works, material }: Specificat
         <dl className="facts">
           <dt>Material</dt>
           <dd>{materialName}</dd>
+          {body.core ? (
+            <>
+              <dt>Core</dt>
+              <dd>
+                {body.core.shape === 'hex' ? 'hexagonal, ' : 'round, '}
+                {formatQuantity(body.core.size, units.diameter, {
+                  decimals: diameterDecimals(units.diameter),
+                  decimal,
+                  withUnit: true,
+                })}
+                {body.core.shape === 'hex' ? ' across flats' : ''}
+              </dd>
+            </>
+          ) : null}
           <dt>Diameter</dt>
           <dd>
             {shownTolerance(body.diameter, units.diameter, {
@@ -99,13 +113,14 @@ interface WorkingFractionProps {
 
 /** How much of the least breaking load the string bears at its reference note, with the caution that goes with it. */
 function WorkingFraction({ body, material, decimal }: WorkingFractionProps) {
-  const strength = material && tensileStrengthAt(material, body.diameter.target)
+  const bearing = loadBearingSection(body.core, body.diameter.target)
+  const strength = material && tensileStrengthAt(material, bearing.size)
   if (!strength) {
     return (
       <p className="small">Its breaking load is not known: the material has no strength at this diameter.</p>
     )
   }
-  const breaking = breakingLoad(strength.low, roundArea(body.diameter.target))
+  const breaking = breakingLoad(strength.low, bearing.area)
   const fraction = workingFraction(body.tension.target, breaking)
   const high = fraction > CAUTION_FRACTION
   return (

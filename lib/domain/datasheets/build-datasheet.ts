@@ -3,10 +3,10 @@ import { MODEL_VERSION } from '../metrology/model-version'
 import type { SpecificationBody, TensionBasis } from '../metrology/specification'
 import type { LotSummaryBody } from '../quality/lot-summary'
 import { ok, type Result, refused } from '../result'
+import { loadBearingSection } from '../strings/load-bearing'
 import type { MaterialBody } from '../strings/material'
 import { frequencyOfNote, noteName } from '../strings/pitch'
-import { roundArea } from '../strings/round-section'
-import { plainWireAxialStiffness } from '../strings/stiffness'
+import { axialStiffness as axialStiffnessOf } from '../strings/stiffness'
 import { breakingLoad, tensileStrengthAt } from '../strings/strength'
 import { elasticStrain, loadedMassPerMetre } from '../strings/stretch'
 import { waveSpeed } from '../strings/wave-speed'
@@ -76,16 +76,16 @@ export function buildDatasheet(facts: DatasheetFacts, request: DatasheetRequest)
   const density = figureOf(lots.flatMap((lot) => lot.effectiveDensity ?? [])) ?? {
     value: specification.effectiveDensity.target,
   }
-  const d = metres(diameter.value)
-  const axialStiffness = plainWireAxialStiffness(material.youngsModulus.value, d)
+  const bearing = loadBearingSection(specification.core, metres(diameter.value))
+  const axialStiffness = axialStiffnessOf(material.youngsModulus.value, bearing.area)
   const unloaded = kilogramsPerMetre(mass.value)
   const masses: TensionMasses = {
     unloaded,
     axialStiffness,
     loaded: loadedMassPerMetre(unloaded, elasticStrain(specification.tension.target, axialStiffness)),
   }
-  const strength = tensileStrengthAt(material, d)
-  const breaking = strength && breakingLoad(strength.low, roundArea(d))
+  const strength = tensileStrengthAt(material, bearing.size)
+  const breaking = strength && breakingLoad(strength.low, bearing.area)
   const rows = request.notes.map((midi): DatasheetRow => {
     const frequency = frequencyOfNote(midi, request.a4)
     return {

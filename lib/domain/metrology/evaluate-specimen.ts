@@ -1,4 +1,4 @@
-import { roundArea } from '../strings/round-section'
+import { loadBearingSection } from '../strings/load-bearing'
 import { breakingLoad, tensileStrengthAt } from '../strings/strength'
 import { type CharacteristicId, characteristicIds } from './characteristics'
 import type { BudgetLine, Estimate, EvaluationContext, SpecimenEvaluation } from './evaluation'
@@ -42,8 +42,9 @@ export function evaluateSpecimen(sheet: SpecimenSheet, context: EvaluationContex
 
 function shownSteps(facts: ModelFacts, { steps }: ModelOutcome): Readonly<Record<string, number>> {
   const { material, specification } = facts.context
-  const strength = tensileStrengthAt(material, specification.diameter.target)
-  const breaking = strength && breakingLoad(strength.low, roundArea(specification.diameter.target))
+  const bearing = loadBearingSection(specification.core, specification.diameter.target)
+  const strength = tensileStrengthAt(material, bearing.size)
+  const breaking = strength && breakingLoad(strength.low, bearing.area)
   const { axialStiffness, chain, force } = steps
   return {
     axialStiffness,

@@ -1,6 +1,10 @@
 import { effectiveDensity } from '../strings/effective-density'
+import { loadBearingSection } from '../strings/load-bearing'
 import type { ResonanceChain } from '../strings/resonance-chain'
-import { plainWireAxialStiffness } from '../strings/stiffness'
+import {
+  axialStiffness as axialStiffnessOf,
+  bendingStiffness as bendingStiffnessOf,
+} from '../strings/stiffness'
 import { ln } from '../units/elementary'
 import { type KilogramsPerMetre, type Newtons, pascals } from '../units/quantity'
 import type { CharacteristicId } from './characteristics'
@@ -34,6 +38,7 @@ export interface ModelOutcome {
  * inputs, so that results which share an input stay correlated as they are: diameter enters both routes by
  * stretch and stiffness, gravity and load only the sounded one. Inputs by id: see the models it is made of;
  * `modulus` Pa and `gravity` m/s² are values, the rest are offsets or relative errors, zero at the centre.
+ * A wound string stretches and bends by its core, and pushes the air by its outer diameter.
  * Closure and density checks are natural logarithms of ratios. Where no diameter was read, the target stands
  * in for it in the corrections, and density and diameter are left out.
  */
@@ -42,10 +47,12 @@ export function measurementModel(facts: ModelFacts, inputs: InputValues): ModelO
   const section = sectionOutcome(facts, inputs)
   const diameter = section.diameter ?? specification.diameter.target
   const modulus = pascals(inputs.modulus ?? material.youngsModulus.value)
-  const axialStiffness = plainWireAxialStiffness(modulus, diameter)
+  const bearing = loadBearingSection(specification.core, diameter)
+  const axialStiffness = axialStiffnessOf(modulus, bearing.area)
+  const bendingStiffness = bendingStiffnessOf(modulus, bearing.secondMoment)
   const { force, hangingForce } = forceOutcome(facts, inputs)
   const weighing = weighingOutcome(facts, inputs, force, axialStiffness)
-  const sounding = soundingOutcome(facts, inputs, { force, diameter, modulus, axialStiffness })
+  const sounding = soundingOutcome(facts, inputs, { force, diameter, axialStiffness, bendingStiffness })
   const weighed = weighing.massPerMetre
   const sounded = sounding.massPerMetre
   const density = (mass: KilogramsPerMetre | undefined): number | undefined =>

@@ -1,7 +1,13 @@
 import { airDensity, isOrdinaryAir } from '../strings/air-density'
 import { airViscosity } from '../strings/air-viscosity'
 import { frequencyOfNote } from '../strings/pitch'
-import { degreesCelsius, type PerKelvin, pascals, perKelvin } from '../units/quantity'
+import {
+  degreesCelsius,
+  type KilogramsPerCubicMetre,
+  type PerKelvin,
+  pascals,
+  perKelvin,
+} from '../units/quantity'
 import type { EvaluationContext } from './evaluation'
 import type { SpecimenSheet } from './sheet'
 import { fundamentalOfPlucks, type LoadFacts, loadOf } from './sheet-readings'
@@ -28,6 +34,16 @@ export interface ModelFacts {
   readonly unknownWeights: readonly string[]
   readonly referenceFrequency: ReturnType<typeof frequencyOfNote>
 }
+
+/**
+ * Density that buoyancy of the weighed piece is reckoned with, kg/m³: the material’s, or what core and wraps of
+ * a wound string have together, which is the density that its specification asks for.
+ */
+export const pieceDensity = ({
+  material,
+  specification,
+}: Pick<EvaluationContext, 'material' | 'specification'>): KilogramsPerCubicMetre =>
+  specification.core ? specification.effectiveDensity.target : material.density.value
 
 /** What is read from sheet and works once, before the chain is run. */
 export function modelFacts(sheet: SpecimenSheet, context: EvaluationContext): ModelFacts {

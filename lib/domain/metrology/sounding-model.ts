@@ -2,7 +2,7 @@ import { airMassPerMetre } from '../strings/air-loading'
 import { lengthByRule, massPerMetreAt20 } from '../strings/diameter-at-20'
 import { massPerMetreFromResonance } from '../strings/mass-from-resonance'
 import { type ResonanceChain, resonanceChain } from '../strings/resonance-chain'
-import { inharmonicity, plainWireBendingStiffness } from '../strings/stiffness'
+import { inharmonicity } from '../strings/stiffness'
 import { unloadedMassPerMetre } from '../strings/stretch'
 import {
   degreesCelsius,
@@ -11,8 +11,8 @@ import {
   kilogramsPerMetre,
   type Metres,
   metres,
+  type NewtonSquareMetres,
   type Newtons,
-  type Pascals,
 } from '../units/quantity'
 import { type InputValues, offset } from './input-values'
 import { type ModelFacts, STEEL_EXPANSION } from './model-facts'
@@ -30,9 +30,11 @@ export interface SoundingOutcome {
 
 export interface SoundedString {
   readonly force: Newtons | undefined
+  /** Outer diameter, which pushes the air. */
   readonly diameter: Metres
-  readonly modulus: Pascals
+  /** Of what bears the load. */
   readonly axialStiffness: Newtons
+  readonly bendingStiffness: NewtonSquareMetres
 }
 
 /**
@@ -44,7 +46,7 @@ export interface SoundedString {
 export function soundingOutcome(
   facts: ModelFacts,
   inputs: InputValues,
-  { axialStiffness, diameter, force, modulus }: SoundedString,
+  { axialStiffness, bendingStiffness, diameter, force }: SoundedString,
 ): SoundingOutcome {
   const { context, expansion, frequency: heard, sheet } = facts
   const { rig } = context
@@ -56,7 +58,6 @@ export function soundingOutcome(
   if (!(read > 0 && sounding > 0)) return {}
   const span = lengthByRule(metres(read), temperature, STEEL_EXPANSION)
   const frequency = hertz(sounding)
-  const bendingStiffness = plainWireBendingStiffness(modulus, diameter)
   const air = { density: facts.airDensity, viscosity: facts.airViscosity }
   if (inharmonicity(bendingStiffness, force, span) > STIFFEST_STRING)
     return {

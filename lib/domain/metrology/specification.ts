@@ -1,3 +1,4 @@
+import type { Core } from '../strings/core-section'
 import type { Hertz, KilogramsPerCubicMetre, KilogramsPerMetre, Metres, Newtons } from '../units/quantity'
 import type { CharacteristicId } from './characteristics'
 
@@ -29,6 +30,8 @@ export interface InspectionPlan {
 
 /** One dated revision of what a product has to be, SI throughout. */
 export interface SpecificationBody {
+  /** What bears the load of a wound string, made of the specification’s material; a plain string has none. */
+  readonly core?: Core
   readonly diameter: Tolerance<Metres>
   readonly massPerMetre: Tolerance<KilogramsPerMetre>
   readonly ovalityMax: Metres

@@ -1,7 +1,7 @@
 import { correctionOn, farFrom20, knownError, temperatureFactor, unusualAir } from './correction-parts'
 import type { Correction } from './evaluation'
 import type { ModelOutcome } from './measurement-model'
-import type { ModelFacts } from './model-facts'
+import { type ModelFacts, pieceDensity } from './model-facts'
 import { pieceLength } from './weighing-model'
 
 /** Corrections that were made to the weighed mass per metre. */
@@ -14,8 +14,7 @@ export function weighingCorrections(
   const { by, reading = 0 } = pieceLength(facts)
   if (weighed === undefined || !sheet.cutMass) return []
   const on = 'massPerMetreWeighed'
-  const { density } = context.material
-  const buoyancy = (1 - facts.airDensity / 8000) / (1 - facts.airDensity / density.value) - 1
+  const buoyancy = (1 - facts.airDensity / 8000) / (1 - facts.airDensity / pieceDensity(context)) - 1
   const strain = steps.weighedLoaded === undefined ? 0 : weighed / steps.weighedLoaded - 1
   const { balance, rule } = context
   return [

@@ -10,7 +10,7 @@ import {
   type Newtons,
 } from '../units/quantity'
 import { type InputValues, offset } from './input-values'
-import { type ModelFacts, STEEL_EXPANSION } from './model-facts'
+import { type ModelFacts, pieceDensity, STEEL_EXPANSION } from './model-facts'
 
 export interface WeighingOutcome {
   /** Unloaded mass per metre at 20 °C. */
@@ -51,7 +51,7 @@ export function weighingOutcome(
   const mass = weighedMass(
     kilograms(sheet.cutMass.si - (context.balance?.error ?? 0) + balance),
     airDensity,
-    context.material.density.value,
+    pieceDensity(context),
   )
   const length =
     by === 'span'

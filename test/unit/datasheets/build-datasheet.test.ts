@@ -70,6 +70,17 @@ describe('tensionByBasis(basis, masses, f, L)', () => {
   })
 })
 
+describe('a tension table of a wound string', () => {
+  it('stretches and breaks by the core alone', () => {
+    const core = { shape: 'hex', size: metres(0.2e-3) } as const
+    const result = buildDatasheet({ ...facts, specification: { ...facts.specification, core } }, request)
+    if (!result.ok) throw new Error(result.problems[0]?.message)
+    const area = (Math.sqrt(3) / 2) * 0.2e-3 ** 2
+    expect(result.value.axialStiffness).toBeCloseTo(206e9 * area, 8)
+    expect(result.value.breakingLoad?.value).toBeCloseTo(2668e6 * area, 8)
+  })
+})
+
 describe('workingState(fraction)', () => {
   it.each([
     [0.24, 'slack'],

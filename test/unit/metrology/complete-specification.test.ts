@@ -70,4 +70,27 @@ describe('completeSpecification', () => {
       expect((T * (1 + T / stiffness)) / (unloaded * (2 * 0.648 * frequency) ** 2)).toBeCloseTo(1, 9)
     }
   })
+
+  it('stretches a wound string by its core, and expects the density of core and wraps together', () => {
+    // Core 0.40 mm, wrap 0.33 mm of 8860 kg/m³: 6.307058 g/m, D 1.06 mm, 7147.02 kg/m³ (physics of strings §8).
+    const wound = completeSpecification(
+      {
+        ...draft,
+        core: { shape: 'round', size: metres(0.4e-3) },
+        diameter: { target: metres(1.06e-3), tolerance: metres(15e-6) },
+        massPerMetre: { target: kilogramsPerMetre(6.307058e-3), tolerance: 0.025 },
+      },
+      steel,
+    )
+    expect(wound.core).toEqual({ shape: 'round', size: 0.4e-3 })
+    expect(wound.effectiveDensity.target).toBeCloseTo(7147.02, 2)
+    const stiffness = steel.youngsModulus.value * (Math.PI / 4) * 0.4e-3 ** 2
+    const T = wound.tension.target
+    expect((T * (1 + T / stiffness)) / (6.307058e-3 * (2 * 0.648 * frequency) ** 2)).toBeCloseTo(1, 9)
+  })
+
+  it('does not reckon the mass of wraps', () => {
+    const core = { shape: 'round', size: metres(0.1e-3) } as const
+    expect(() => completeSpecification({ ...draft, core }, steel)).toThrow(RangeError)
+  })
 })
