@@ -12,7 +12,7 @@ import { type Environment, filePath } from './env'
 import { takeTurns } from './sqlite-transactions'
 
 /** What a connection is for: decides how long it waits, and whether it may write. */
-export type ConnectionRole = 'writer' | 'reader' | 'sign-in' | 'script'
+export type ConnectionRole = 'writer' | 'reader' | 'sign-in' | 'script' | 'worker'
 
 /**
  * Milliseconds that SQLite waits for another connection's lock. It waits in the server's only thread, so the
@@ -23,6 +23,8 @@ const busyTimeouts: Readonly<Record<ConnectionRole, number>> = {
   reader: 20,
   'sign-in': 20,
   script: 10_000,
+  // It waits in its own thread.
+  worker: 2_000,
 }
 
 /**
@@ -34,6 +36,7 @@ const busyPatience: Readonly<Record<ConnectionRole, number>> = {
   reader: 5_000,
   'sign-in': 15_000,
   script: 0,
+  worker: 0,
 }
 
 /** Pages of the log after which it is copied back, and the size it is cut to: the log stays bounded. */
@@ -151,6 +154,7 @@ export const poolSizes: Readonly<Record<ConnectionRole, number>> = {
   reader: 6,
   'sign-in': 3,
   script: 2,
+  worker: 1,
 }
 
 /** What node-postgres needs to connect in a role. */

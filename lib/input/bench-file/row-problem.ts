@@ -1,0 +1,22 @@
+import type { Problem } from '@/lib/domain/errors'
+
+/** Most of a cell that is shown in a sentence. */
+const SHOWN = 60
+
+/** Control characters but line breaks and tabs, lone surrogates, and the sign for what could not be decoded. */
+export const unfit = /(?![\n\r\t])[\p{Cc}\p{Surrogate}\uFFFD]/u
+
+/** What is wrong with a cell: column, sentence, mend, value. */
+export const problemOf = (where: string, value: string, message: string, mend: string): Problem => ({
+  code: 'bad-input',
+  message: `${where} ${message}.`,
+  where,
+  mend,
+  details: { value: shown(value) },
+})
+
+/** A cell as it may stand in a sentence. */
+export const shown = (value: string): string => {
+  const plain = value.replace(/[\p{Cc}\p{Surrogate}]/gu, '\uFFFD')
+  return plain.length > SHOWN ? `${plain.slice(0, SHOWN)}…` : plain
+}
