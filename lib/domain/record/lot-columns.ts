@@ -150,7 +150,7 @@ export type LotCell =
 /** The cell of a lot in a column. */
 export function lotCell(column: Pick<LotColumn, 'id' | 'unit'>, lot: LotListItem): LotCell {
   const what = measured[column.id]
-  if (what && column.unit) return { kind: 'number', value: valueOf(what, column.unit, lot) }
+  if (what && column.unit) return { kind: 'number', value: measuredValue(what, column.unit, lot) }
   const text = (given: string | undefined): LotCell => ({ kind: 'text', text: given ?? '' })
   switch (column.id) {
     case 'product':
@@ -180,7 +180,7 @@ export function lotCell(column: Pick<LotColumn, 'id' | 'unit'>, lot: LotListItem
   }
 }
 
-function valueOf({ characteristic, statistic }: Measured, unit: UnitId, lot: LotListItem) {
+function measuredValue({ characteristic, statistic }: Measured, unit: UnitId, lot: LotListItem) {
   const summary = lot.summaries[characteristic]
   if (!summary) return undefined
   if (statistic === 'mean') return fromSi(summary.mean, unit)

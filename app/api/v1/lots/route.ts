@@ -1,5 +1,6 @@
 import { changing, parsedOrThrow, reading } from '@/app/api/_route'
-import { listLotsSchema, openLotSchema } from '@/lib/input/lot'
+import { openLotSchema } from '@/lib/input/lot'
+import { listLotsSchema } from '@/lib/input/lot-list'
 import { listLots } from '@/lib/services/list-lots'
 import { openLot } from '@/lib/services/open-lot'
 

@@ -1,0 +1,3 @@
+import { lotsFile } from '../_lots-file'
+
+export const GET = lotsFile('csv')
