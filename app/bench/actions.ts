@@ -5,7 +5,10 @@ import { redirect } from 'next/navigation'
 import { currentActor } from '@/app/_session'
 import { submitted } from '@/app/_submit'
 import type { FormState } from '@/app/_ui/forms/form-state'
+import { lotMaterialRoles } from '@/lib/domain/record/material-in'
+import { ok } from '@/lib/domain/result'
 import { openLotSchema } from '@/lib/input/lot'
+import { atRows, readMaterialRows, refusedAtRows, roleRow } from '@/lib/input/lot-materials-form'
 import { parseInput } from '@/lib/input/parse-input'
 import { getWorks } from '@/lib/services/get-works'
 import { openLot } from '@/lib/services/open-lot'
@@ -40,7 +43,10 @@ export async function openLotAction(_: FormState, form: FormData): Promise<FormS
   return submitted(form, {
     parse: (fields) => {
       const length = filled(fields.lengthMetres)
-      return parseInput(openLotSchema, {
+      const rows = readMaterialRows(fields, lotMaterialRoles.map(roleRow))
+      if (!rows.ok) return rows
+      const { materials, at } = rows.value
+      const parsed = parseInput(openLotSchema, {
         code: (fields.code ?? '').trim(),
         productCode: fields.productCode,
         madeAt: instantOf(fields.madeAt, timeZone),
@@ -48,9 +54,12 @@ export async function openLotAction(_: FormState, form: FormData): Promise<FormS
         dieCode: filled(fields.dieCode),
         ...(length === undefined ? {} : { lengthMetres: Number(length.replace(',', '.')) }),
         setting: fields.setting ?? '',
+        materials,
       })
+      const input = atRows(parsed, at)
+      return input.ok ? ok({ input: input.value, at }) : input
     },
-    serve: (actor, input) => openLot(actor, input),
+    serve: (actor, { input, at }) => refusedAtRows(() => openLot(actor, input), at),
     goTo: (reply) => `/bench/${encodeURIComponent(reply.code)}`,
   })
 }

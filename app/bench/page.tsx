@@ -13,8 +13,10 @@ import { Table } from '@/app/_ui/tables/Table'
 import { listLotsToMeasure } from '@/lib/services/get-bench'
 import { getWorks } from '@/lib/services/get-works'
 import { listEquipment } from '@/lib/services/list-equipment'
+import { listMaterialsInUse } from '@/lib/services/list-materials-in'
 import { listProducts } from '@/lib/services/list-products'
 import { MadeAtField } from './_ui/MadeAtField'
+import { MaterialFields } from './_ui/MaterialFields'
 import { ScanLot } from './_ui/ScanLot'
 import { openLotAction } from './actions'
 import './bench.css'
@@ -34,6 +36,7 @@ export default roomPage(async (actor) => {
   const lots = await listLotsToMeasure(actor)
   const products = (await listProducts(actor)).filter((one) => one.active && one.inForce)
   const equipment = await listEquipment(actor)
+  const materialsIn = await listMaterialsInUse(actor)
   return (
     <>
       <PageHead
@@ -97,6 +100,7 @@ export default roomPage(async (actor) => {
                       .filter((one) => one.active)
                       .map(({ code, name }) => ({ value: code, label: `${name} (${code})` }))}
                   />
+                  <MaterialFields materials={materialsIn} />
                   <NumberField name="lengthMetres" label="Length of the lot" unit="m" optional />
                 </div>
                 <div className="actions">

@@ -5,6 +5,7 @@ import { EmptyState } from '@/app/_ui/shell/EmptyState'
 import { PageHead } from '@/app/_ui/shell/PageHead'
 import { may } from '@/lib/access/permit'
 import { getWorks } from '@/lib/services/get-works'
+import { listDrawn } from '@/lib/services/list-drawn'
 import { listEquipment } from '@/lib/services/list-equipment'
 import { DieSection, MachineSection } from './_ui/MachineSections'
 import { GaugeSection, RigSection, WeightSection } from './_ui/MeasuringSections'
@@ -14,6 +15,7 @@ export const metadata: Metadata = { title: 'Equipment' }
 export default roomPage(async (actor) => {
   const works = await getWorks(actor)
   const list = await listEquipment(actor)
+  const drawn = await listDrawn(actor)
   const keeps = may(actor, 'equipment.keep')
   const nothing = Object.values(list).every((rows) => rows.length === 0)
   const section = { list, works, keeps, now: Date.now() }
@@ -43,7 +45,7 @@ export default roomPage(async (actor) => {
       <WeightSection {...section} />
       <div className="columns even">
         <MachineSection {...section} />
-        <DieSection {...section} />
+        <DieSection {...section} drawn={drawn} />
       </div>
     </>
   )

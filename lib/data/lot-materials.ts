@@ -119,8 +119,15 @@ export interface MadeOfRow {
   readonly code: string
 }
 
+export const countMadeOf = (tx: Tx, materialInIds: readonly number[]): Promise<number> =>
+  tx.lotMaterial.count({ where: { materialInId: { in: [...materialInIds] } } })
+
 /** Lots made of any of these materials, newest first. */
-export const listMadeOf = async (tx: Tx, materialInIds: readonly number[]): Promise<readonly MadeOfRow[]> =>
+export const listMadeOf = async (
+  tx: Tx,
+  materialInIds: readonly number[],
+  take: number,
+): Promise<readonly MadeOfRow[]> =>
   (
     await tx.lotMaterial.findMany({
       where: { materialInId: { in: [...materialInIds] } },
@@ -141,6 +148,7 @@ export const listMadeOf = async (tx: Tx, materialInIds: readonly number[]): Prom
         },
       },
       orderBy: [{ lot: { madeAt: 'desc' } }, { lot: { code: 'desc' } }, { role: 'asc' }, { place: 'asc' }],
+      take,
     })
   ).map(({ lot, materialIn, ...row }) => ({
     lotCode: lot.code,

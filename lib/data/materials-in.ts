@@ -142,6 +142,16 @@ export const listMaterialInRows = async (
 export const countMaterialInRows = (tx: Tx, filter: MaterialInFilter): Promise<number> =>
   tx.materialIn.count({ where: whereOf(filter) })
 
+/** By kind, the newest entered first. */
+export const listMaterialsInUse = async (tx: Tx): Promise<readonly MaterialInRow[]> =>
+  (
+    await tx.materialIn.findMany({
+      where: { active: true },
+      select,
+      orderBy: [{ kind: 'asc' }, { createdAt: 'desc' }, { code: 'asc' }],
+    })
+  ).map(rowOf)
+
 /** Those with these codes, in no order. */
 export const findMaterialsIn = async (tx: Tx, codes: readonly string[]): Promise<readonly MaterialInRow[]> =>
   codes.length === 0

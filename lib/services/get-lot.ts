@@ -5,6 +5,7 @@ import { database, type Tx } from '@/lib/data/database'
 import { listDispositions } from '@/lib/data/dispositions'
 import { listLedgerOf } from '@/lib/data/ledger-reading'
 import { frozenLimitsOf, listLimitSets } from '@/lib/data/limit-sets'
+import { listLotMaterials } from '@/lib/data/lot-materials'
 import { findLotByCode, type LotRow } from '@/lib/data/lots'
 import { listPersonNames } from '@/lib/data/people-names'
 import { problem } from '@/lib/domain/errors'
@@ -13,6 +14,7 @@ import type { DispositionVerb, Proposal } from '@/lib/domain/quality/propose-dis
 import type { LotAssessment } from '@/lib/domain/record/assess-lot'
 import { type ChartedStatistic, limitsAt } from '@/lib/domain/record/chart-history'
 import type { LotState } from '@/lib/domain/record/lot-state'
+import type { LotMaterialRole, MaterialInKind } from '@/lib/domain/record/material-in'
 import type { DecisionEvidence } from './decide-lot'
 import type { WorksFacts } from './get-works'
 import { loadLot } from './lot-assessment'
@@ -32,6 +34,20 @@ export interface DispositionView {
   readonly answers: readonly { readonly stopId: string; readonly answer: string }[]
   readonly evidence: DecisionEvidence
   readonly evidenceHash: string
+}
+
+/** A coil, spool or resin batch that went into the lot, and where along it where that is known. */
+export interface LotMaterialView {
+  readonly role: LotMaterialRole
+  /** From 1 within the role, along the lot. */
+  readonly place: number
+  readonly code: string
+  readonly name: string
+  readonly kind: MaterialInKind
+  readonly heat: string
+  readonly parentCode: string | undefined
+  readonly fromMetre: number | undefined
+  readonly toMetre: number | undefined
 }
 
 export interface HistoryEntry {
@@ -70,6 +86,8 @@ export interface LotView {
   }
   readonly product: { readonly code: string; readonly name: string; readonly construction: string }
   readonly material: { readonly code: string; readonly name: string }
+  /** What it is made of, by role and place. */
+  readonly materials: readonly LotMaterialView[]
   readonly specification: {
     readonly number: number
     readonly effectiveFrom: number
@@ -100,6 +118,7 @@ export async function getLot(actor: Actor | undefined, code: string): Promise<Lo
   if (lot.state !== 'released') permit(actor, 'lots.read')
   const loaded = await loadLot(read, lot)
   const dispositions = await listDispositions(read, lot.id)
+  const materials = (await listLotMaterials(read, [lot.id])).get(lot.id) ?? []
   const ledger = await listLedgerOf(read, `lot ${lot.code}`)
   const names = await listPersonNames(
     read,
@@ -131,6 +150,7 @@ export async function getLot(actor: Actor | undefined, code: string): Promise<Lo
       construction: lot.product.construction,
     },
     material: { code: loaded.revision.material.code, name: loaded.revision.material.name },
+    materials: materials.map(({ lotId: _, materialInId: __, ...one }) => one),
     specification: {
       number: loaded.revision.number,
       effectiveFrom: loaded.revision.effectiveFrom,

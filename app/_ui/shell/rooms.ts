@@ -23,6 +23,7 @@ const groups: readonly (readonly Room[])[] = [
   [
     { href: '/catalogue', label: 'Catalogue', needs: 'catalogue.read' },
     { href: '/equipment', label: 'Equipment', needs: 'equipment.read' },
+    { href: '/materials-in', label: 'Materials in', needs: 'materials-in.read' },
   ],
   [{ href: '/settings', label: 'Settings', needs: 'settings.read' }],
 ]

@@ -1,6 +1,7 @@
 import Link from 'next/link'
 import { Table } from '@/app/_ui/tables/Table'
-import { formatQuantity } from '@/lib/domain/units/format'
+import { formatNumber, formatQuantity } from '@/lib/domain/units/format'
+import type { DrawnByDie } from '@/lib/services/list-drawn'
 import { equipmentPath } from './kinds'
 import { SectionFrame, type SectionProps } from './SectionFrame'
 
@@ -31,7 +32,12 @@ export function MachineSection({ list: { machines }, keeps }: SectionProps) {
   )
 }
 
-export function DieSection({ list: { dies }, works: { units, numberFormat: decimal }, keeps }: SectionProps) {
+export function DieSection({
+  list: { dies },
+  works: { units, numberFormat: decimal },
+  keeps,
+  drawn,
+}: SectionProps & { readonly drawn: DrawnByDie }) {
   return (
     <SectionFrame
       title="Dies"
@@ -53,6 +59,17 @@ export function DieSection({ list: { dies }, works: { units, numberFormat: decim
             unit: units.diameter,
             number: true,
             cell: ({ sizeMetres }) => formatQuantity(sizeMetres, units.diameter, { decimal }),
+          },
+          {
+            head: 'Drawn',
+            unit: 'm',
+            number: true,
+            cell: ({ id }) => {
+              const own = drawn.get(id)
+              if (own === undefined) return '0'
+              if (own.withoutLength === own.lots) return '–'
+              return `${own.withoutLength > 0 ? 'at least ' : ''}${formatNumber(own.metres, { decimals: 0, decimal })}`
+            },
           },
         ]}
       />

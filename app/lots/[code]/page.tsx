@@ -5,8 +5,10 @@ import { EmptyState } from '@/app/_ui/shell/EmptyState'
 import { may } from '@/lib/access/permit'
 import { isFinal } from '@/lib/domain/record/lot-state'
 import { getLot } from '@/lib/services/get-lot'
+import { listMaterialsInUse } from '@/lib/services/list-materials-in'
 import { History } from '../_ui/History'
 import { LotHead } from '../_ui/LotHead'
+import { LotMaterials } from '../_ui/LotMaterials'
 import { ResultsTable } from '../_ui/ResultsTable'
 import { Specimens } from '../_ui/Specimens'
 import '@/app/_ui/charts/charts.css'
@@ -17,6 +19,9 @@ export const metadata: Metadata = { title: 'Lot' }
 export default roomPage(async (actor, { params }) => {
   const view = await getLot(actor, params.code ?? '')
   const { assessment, lot, signals } = view
+  const maySeeMaterials = may(actor, 'materials-in.read')
+  const changes = may(actor, isFinal(lot.state) ? 'readings.supersede-any' : 'lots.open')
+  const choices = maySeeMaterials && changes ? await listMaterialsInUse(actor) : undefined
   const open = signals.filter((one) => one.state === 'open')
   return (
     <>
@@ -65,6 +70,7 @@ export default roomPage(async (actor, { params }) => {
           <Specimens view={view} />
         </>
       )}
+      <LotMaterials view={view} maySeeMaterials={maySeeMaterials} choices={choices} />
       <History view={view} />
     </>
   )

@@ -7,6 +7,7 @@ const words: Readonly<Record<string, string>> = {
   'open-lot': 'Opened',
   'record-specimens': 'Measured',
   'supersede-reading': 'Corrected',
+  'change-materials': 'Made of',
 }
 
 const verbOf = (entry: HistoryEntry): string => {
@@ -14,6 +15,18 @@ const verbOf = (entry: HistoryEntry): string => {
   if (decided) return verbWords[decided as DispositionVerb]?.name ?? decided
   return words[entry.verb] ?? entry.verb.replaceAll('-', ' ')
 }
+
+/** Codes of the coils, spools and batches that an entry names, each once. */
+const codesOf = (materials: unknown): string =>
+  Array.isArray(materials)
+    ? [
+        ...new Set(
+          materials.flatMap((one: unknown): string[] =>
+            typeof one === 'object' && one !== null && 'code' in one ? [String(one.code)] : [],
+          ),
+        ),
+      ].join(', ')
+    : ''
 
 function textOf({ body, verb }: HistoryEntry): string {
   const text = (key: string): string => (typeof body[key] === 'string' ? (body[key] as string) : '')
@@ -23,9 +36,12 @@ function textOf({ body, verb }: HistoryEntry): string {
       body.revision ? `specification revision ${body.revision}` : '',
       text('machineCode'),
       text('dieCode'),
+      codesOf(body.materials),
     ]
       .filter(Boolean)
       .join(', ')
+  if (verb === 'change-materials')
+    return `${codesOf(body.after) || 'nothing named'}, before that ${codesOf(body.before) || 'nothing'}: “${text('reason')}”`
   if (verb.startsWith('decide-')) return `“${text('reason')}”`
   if (text('reason')) return `“${text('reason')}”`
   const { specimens } = body

@@ -3,14 +3,17 @@ import { database } from '@/lib/data/database'
 import { listLotMaterials } from '@/lib/data/lot-materials'
 import { findLotId } from '@/lib/data/lots'
 import { changeLotMaterialsSchema, openLotSchema } from '@/lib/input/lot'
-import { type MaterialInInput, materialInSchema } from '@/lib/input/material-in'
+import { listMaterialsInSchema, type MaterialInInput, materialInSchema } from '@/lib/input/material-in'
 import { changeLotMaterials } from '@/lib/services/change-lot-materials'
+import { getLot } from '@/lib/services/get-lot'
+import { getMaterialIn } from '@/lib/services/get-material-in'
 import {
   createMaterialIn,
   requireMaterialIn,
   setMaterialInActive,
   updateMaterialIn,
 } from '@/lib/services/keep-material-in'
+import { listMaterialsIn, listMaterialsInUse } from '@/lib/services/list-materials-in'
 import { openLot } from '@/lib/services/open-lot'
 import { refusalOf } from '../../support/refusal-of'
 import { day, type SteelWorks, setUpSteelWorks } from '../../support/steel-works'
@@ -174,6 +177,83 @@ describeOnEachEngine('materials in', () => {
         message: 'The coil C-2 is put away.',
       })
       expect(await findLotId(database().read, 'M-2')).toBeUndefined()
+    })
+  })
+
+  describe('listMaterialsIn', () => {
+    const list = (given: object) => listMaterialsIn(works.bench, listMaterialsInSchema.parse(given))
+
+    it('finds by code, name, heat and supplier, whatever the case', async () => {
+      await createMaterialIn(
+        works.quality,
+        'Q-1',
+        input({ kind: 'coil', name: 'Bronze 120', heat: 'Zeta 9', supplier: 'Ærø Wire' }),
+      )
+      for (const search of ['q-1', 'BRONZE', 'zeta', 'ærø'])
+        expect((await list({ search })).materials.map(({ code }) => code)).toEqual(['Q-1'])
+      expect(await list({ search: 'q-2' })).toEqual({ materials: [], count: 0, page: 1, pages: 1 })
+    })
+
+    it('keeps to a kind and to what is in use', async () => {
+      await createMaterialIn(works.quality, 'R-2', input({ kind: 'resin-batch' }))
+      await setMaterialInActive(works.quality, 'R-2', 1, false)
+      const codes = async (given: object) => (await list(given)).materials.map(({ code }) => code)
+      expect(await codes({ kind: 'resin-batch' })).toEqual(['R-1', 'R-2'])
+      expect(await codes({ kind: 'resin-batch', inUse: 'yes' })).toEqual(['R-1'])
+      expect(await codes({ kind: 'resin-batch', inUse: 'no' })).toEqual(['R-2'])
+      expect((await listMaterialsInUse(works.bench)).map(({ code }) => code)).not.toContain('R-2')
+    })
+
+    it('counts the lots and stays on the last page there is', async () => {
+      await open('M-20', [{ role: 'resin', code: 'R-1' }])
+      const found = await list({ search: 'R-1', page: 9 })
+      expect(found).toMatchObject({ page: 1, pages: 1 })
+      expect(found.materials[0]?.lots).toBe(
+        await database().read.lotMaterial.count({ where: { materialIn: { code: 'R-1' } } }),
+      )
+    })
+
+    it('is not for sales', async () => {
+      expect(await refusalOf(listMaterialsIn(works.sales, { search: '', page: 1 }))).toMatchObject({
+        code: 'not-permitted',
+      })
+      expect(await refusalOf(listMaterialsInUse(works.sales))).toMatchObject({ code: 'not-permitted' })
+    })
+  })
+
+  describe('getMaterialIn', () => {
+    it('shows the spools wound from a coil, and lots made of it or through them, newest first', async () => {
+      await createMaterialIn(works.quality, 'G-1', input({ kind: 'coil' }))
+      await createMaterialIn(works.quality, 'G-2', input({ kind: 'spool', parentCode: 'G-1' }))
+      await open('M-30', [{ role: 'core', code: 'G-1', fromMetre: 0, toMetre: 700 }])
+      await open('M-31', [{ role: 'core', code: 'G-2', fromMetre: 10 }], {
+        madeAt: new Date(day(6)).toISOString(),
+      })
+      const view = await getMaterialIn(works.bench, 'G-1')
+      expect(view).toMatchObject({ row: { code: 'G-1' }, spools: [{ code: 'G-2' }], links: 2 })
+      expect(view.madeOf).toMatchObject([
+        { lotCode: 'M-31', code: 'G-2', fromMetre: 10, toMetre: undefined, state: 'measuring' },
+        { lotCode: 'M-30', code: 'G-1', toMetre: 700, productName: 'Larch 254' },
+      ])
+      expect((await getMaterialIn(works.bench, 'G-2')).madeOf.map(({ lotCode }) => lotCode)).toEqual(['M-31'])
+      expect(await refusalOf(getMaterialIn(works.sales, 'G-1'))).toMatchObject({ code: 'not-permitted' })
+    })
+
+    it('is on the page of the lot', async () => {
+      await open('M-32', [{ role: 'core', code: 'S-1', toMetre: 12 }])
+      expect((await getLot(works.bench, 'M-32')).materials).toEqual([
+        {
+          role: 'core',
+          place: 1,
+          code: 'S-1',
+          name: 'Music wire 254',
+          kind: 'spool',
+          heat: '',
+          parentCode: 'C-1',
+          fromMetre: undefined,
+          toMetre: 12,
+        },
+      ])
     })
   })
 

@@ -9,13 +9,14 @@ import { PageHead } from '@/app/_ui/shell/PageHead'
 import type { Actor } from '@/lib/access/actor'
 import { may } from '@/lib/access/permit'
 import { gaugeKinds } from '@/lib/input/equipment'
+import { getDie } from '@/lib/services/get-die'
+import { getMachine } from '@/lib/services/get-machine'
 import { getWorks, type WorksFacts } from '@/lib/services/get-works'
-import { requireDie } from '@/lib/services/keep-die'
 import { requireGauge } from '@/lib/services/keep-gauge'
-import { requireMachine } from '@/lib/services/keep-machine'
 import { requireWeight } from '@/lib/services/keep-weight'
 import { DieFields, GaugeFields, MachineFields, WeightFields } from '../../_ui/EquipmentForms'
 import { type EquipmentKind, equipmentKindOf, kindWords } from '../../_ui/kinds'
+import { DrawnThroughDie, MadeOnMachine } from '../../_ui/MadeWith'
 import { PutAway } from '../../_ui/PutAway'
 import { updateEquipmentAction } from '../../actions'
 
@@ -29,6 +30,8 @@ interface Found {
     readonly name?: string
   }
   readonly fields: ReactNode
+  /** What was made with it. */
+  readonly made?: ReactNode
 }
 
 const find = async (kind: EquipmentKind, code: string, actor: Actor, works: WorksFacts): Promise<Found> => {
@@ -43,12 +46,20 @@ const find = async (kind: EquipmentKind, code: string, actor: Actor, works: Work
       return { row, fields: <WeightFields works={works} row={row} /> }
     }
     case 'machines': {
-      const row = await requireMachine(actor, code)
-      return { row, fields: <MachineFields works={works} row={row} /> }
+      const view = await getMachine(actor, code)
+      return {
+        row: view.row,
+        fields: <MachineFields works={works} row={view.row} />,
+        made: <MadeOnMachine view={view} works={works} maySeeDrift={may(actor, 'drift.read')} />,
+      }
     }
     case 'dies': {
-      const row = await requireDie(actor, code)
-      return { row, fields: <DieFields works={works} row={row} /> }
+      const view = await getDie(actor, code)
+      return {
+        row: view.row,
+        fields: <DieFields works={works} row={view.row} />,
+        made: <DrawnThroughDie view={view} works={works} maySeeDrift={may(actor, 'drift.read')} />,
+      }
     }
   }
 }
@@ -57,7 +68,7 @@ export default roomPage(async (actor, { params }) => {
   const kind = equipmentKindOf(params.kind)
   if (kind === undefined) notFound()
   const works = await getWorks(actor)
-  const { row, fields } = await find(kind, params.code ?? '', actor, works)
+  const { row, fields, made } = await find(kind, params.code ?? '', actor, works)
   const keeps = may(actor, 'equipment.keep')
   return (
     <>
@@ -79,6 +90,7 @@ export default roomPage(async (actor, { params }) => {
           ) : undefined
         }
       />
+      {made}
       <ActionForm action={updateEquipmentAction.bind(null, kind, row.code)} label={row.code}>
         <fieldset disabled={!keeps}>{fields}</fieldset>
         {keeps ? (

@@ -1,0 +1,28 @@
+import { SelectField } from '@/app/_ui/forms/SelectField'
+import { fitsRole, type LotMaterialRole, lotMaterialRoles } from '@/lib/domain/record/material-in'
+import { roleRow } from '@/lib/input/lot-materials-form'
+import type { MaterialInChoice } from '@/lib/services/list-materials-in'
+
+const labels: Readonly<Record<LotMaterialRole, string>> = {
+  core: 'Coil or spool of the wire',
+  'wrap-1': 'Spool of the wrap',
+  'wrap-2': 'Spool of the second wrap',
+  resin: 'Resin batch',
+}
+
+/** One choice for each role that something in use fits; splices are named on the lot's page later. */
+export function MaterialFields({ materials }: { readonly materials: readonly MaterialInChoice[] }) {
+  return lotMaterialRoles.map((role) => {
+    const fitting = materials.filter(({ kind }) => fitsRole(kind, role))
+    return fitting.length === 0 ? null : (
+      <SelectField
+        key={role}
+        name={`${roleRow(role).row}.code`}
+        label={labels[role]}
+        optional
+        none="not said"
+        options={fitting.map(({ code, name }) => ({ value: code, label: `${code} · ${name}` }))}
+      />
+    )
+  })
+}

@@ -1,0 +1,3 @@
+'use client'
+
+export { RoomError as default } from '@/app/_ui/shell/RoomError'

@@ -1,0 +1,1 @@
+export { RoomLayout as default } from '@/app/_ui/shell/RoomLayout'

@@ -1,0 +1,1 @@
+export { RoomLoading as default } from '@/app/_ui/shell/RoomLoading'

@@ -1,0 +1,1 @@
+export { RoomNotFound as default } from '@/app/_ui/shell/RoomNotFound'
