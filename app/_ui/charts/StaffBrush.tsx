@@ -25,7 +25,12 @@ export interface StaffBrushProps {
 
 /** All lots in little; the window is dragged as a whole or by its ends, or moved with the arrow keys. */
 export function StaffBrush({ input, window, onWindow, frame, width }: StaffBrushProps) {
-  const brush = useMemo(() => staffBrush(input, frame, width), [input, frame, width])
+  // The frame is made anew with each window; of the overview only its place on the page matters.
+  const { x: left0, w: wide, compact } = frame
+  const brush = useMemo(
+    () => staffBrush(input, { x: left0, w: wide, compact }, width),
+    [input, left0, wide, compact, width],
+  )
   const held = useRef<{ grip: Grip; at: number; window: LotWindow } | undefined>(undefined)
   const { lotCount, xAt, indexAt } = brush
   const codeAt = (index: number): string => input.lots[index]?.code ?? ''

@@ -13,13 +13,17 @@ import { buildStaffChart, clampWindow, newestWindow } from '@/lib/domain/charts/
 import { describeStaffChart } from '@/lib/domain/charts/describe-staff-chart'
 import { lotHref } from '@/lib/domain/charts/draw-notes'
 import { layoutStaffChart } from '@/lib/domain/charts/layout-staff-chart'
+import { ZOOM_STEP, zoomWindow } from '@/lib/domain/charts/pan-zoom'
 import { moveWindow } from '@/lib/domain/charts/staff-brush'
 import type { LotWindow, StaffChartInput } from '@/lib/domain/charts/staff-chart'
 import { lotAt, pointerShapes, readingShapes, readingText, readLot } from '@/lib/domain/charts/staff-pointer'
 import { ShapesView } from './DrawingView'
 import { StaffBrush } from './StaffBrush'
+import { StaffLayer } from './StaffLayer'
 import { StaffPlot } from './StaffPlot'
 import { StaffTable } from './StaffTable'
+import { StaffZoom } from './StaffZoom'
+import { usePanZoom } from './use-pan-zoom'
 import { useWidth } from './use-width'
 
 export interface StaffChartProps {
@@ -74,6 +78,18 @@ export function StaffChart(props: StaffChartProps) {
     setOwnPointer(next)
     props.onPointer?.(next)
   }
+  const pan = usePanZoom({
+    input,
+    layout,
+    window,
+    settled: shown.from === window.from && shown.to === window.to,
+    onWindow: setWindow,
+  })
+  const zoom = (direction: 'in' | 'out'): void => {
+    const factor = direction === 'in' ? 1 / ZOOM_STEP : ZOOM_STEP
+    const anchor = pointer ?? (window.from + window.to) / 2
+    setWindow(clampWindow(zoomWindow(window, factor, anchor, lotCount), lotCount))
+  }
   const pointAt = (event: PointerEvent<HTMLElement>): void => {
     const left = event.currentTarget.getBoundingClientRect().left
     const x = event.clientX - left
@@ -81,6 +97,7 @@ export function StaffChart(props: StaffChartProps) {
   }
   const press = (event: PointerEvent<HTMLElement>): void => {
     const before = pointer
+    pan.down(event)
     pointAt(event)
     const x = event.clientX - event.currentTarget.getBoundingClientRect().left
     freshTap.current = event.pointerType === 'touch' && lotAt(layout, x) !== before
@@ -88,16 +105,23 @@ export function StaffChart(props: StaffChartProps) {
   }
   // A finger has no hovering: the first tap on a note reads it, the second one follows it.
   const click = (event: MouseEvent<HTMLElement>): void => {
-    if (freshTap.current) event.preventDefault()
+    const isDrag = pan.wasDragged()
+    if (freshTap.current || isDrag) event.preventDefault()
     freshTap.current = false
+    if (isDrag) return
     const slur = event.target instanceof Element ? event.target.closest('[data-mark="slur"]') : null
     const signal = slur?.getAttribute('data-signal')
     if (signal) props.onSignal?.(signal)
   }
   const move = (event: KeyboardEvent<HTMLElement>): void => {
     const { key } = event
+    // With ctrl or cmd they are the browser’s own.
+    if (event.ctrlKey || event.metaKey || event.altKey) return
     const by = strides[key]
     if (key === 'Enter' && reading) onOpen(reading.code)
+    else if (key === '+' || key === '=') zoom('in')
+    else if (key === '-') zoom('out')
+    else if (key === '0') setWindow({ from: 0, to: lotCount - 1 })
     else if (key === 'Escape') setPointer(undefined)
     else if (key === 'Home') setPointer(window.from)
     else if (key === 'End') setPointer(window.to)
@@ -118,14 +142,21 @@ export function StaffChart(props: StaffChartProps) {
         ) : (
           <>
             <div
+              ref={pan.box}
               className="staff-plot"
+              data-dragged={pan.layer ? true : undefined}
               style={{ width: layout.width, height: layout.height }}
-              onPointerMove={pointAt}
+              onPointerMove={(event) => (pan.move(event) ? undefined : pointAt(event))}
               onPointerDown={press}
+              onPointerUp={pan.up}
+              onPointerCancel={pan.up}
               onClickCapture={click}
             >
               <div aria-hidden="true">
                 <StaffPlot layout={layout} />
+                {pan.layer ? (
+                  <StaffLayer layout={pan.layer.layout} wide={pan.layer.wide} moved={pan.moved} />
+                ) : null}
                 <svg
                   className="staff-over"
                   aria-hidden="true"
@@ -133,7 +164,7 @@ export function StaffChart(props: StaffChartProps) {
                   height={layout.height}
                   viewBox={`0 0 ${layout.width} ${layout.height}`}
                 >
-                  {pointer === undefined ? null : (
+                  {pointer === undefined || pan.layer ? null : (
                     <>
                       <ShapesView shapes={pointerShapes(layout, pointer)} />
                       <ShapesView shapes={readingShapes(layout, pointer)} />
@@ -164,13 +195,16 @@ export function StaffChart(props: StaffChartProps) {
               ) : null}
             </div>
             {lotCount > 1 ? (
-              <StaffBrush
-                input={input}
-                window={window}
-                onWindow={setWindow}
-                frame={layout.frame}
-                width={layout.width}
-              />
+              <>
+                <StaffBrush
+                  input={input}
+                  window={window}
+                  onWindow={setWindow}
+                  frame={layout.frame}
+                  width={layout.width}
+                />
+                <StaffZoom window={window} lotCount={lotCount} onZoom={zoom} onWindow={setWindow} />
+              </>
             ) : null}
           </>
         )}

@@ -43,10 +43,11 @@ export const StaffPlot = memo(function StaffPlot({ layout }: { readonly layout: 
   const margins = useMemo(() => marginShapes(layout), [layout])
   const data = useMemo(
     () =>
-      chart.lots.slice(chart.window.from, chart.window.to + 1).map(({ code }, offset) => ({
-        index: chart.window.from + offset,
-        code,
-      })),
+      // Domains are given: the ends of the window stand for all the lots between them.
+      [...new Set([chart.window.from, chart.window.to])].flatMap((index) => {
+        const lot = chart.lots[index]
+        return lot ? [{ index, code: lot.code }] : []
+      }),
     [chart],
   )
   const [first] = staves

@@ -1,6 +1,6 @@
 import { barLinesWithin } from './bar-lines'
 import { buildStave } from './build-stave'
-import type { LotWindow, StaffChart, StaffChartInput } from './staff-chart'
+import { type LotWindow, NEWEST_LOTS, type StaffChart, type StaffChartInput } from './staff-chart'
 
 /** A window within the lots there are, ends in order; without one, all lots. */
 export function clampWindow(window: LotWindow | undefined, lotCount: number): LotWindow {
@@ -12,8 +12,8 @@ export function clampWindow(window: LotWindow | undefined, lotCount: number): Lo
   return { from: Math.min(from, to), to: Math.max(from, to) }
 }
 
-/** The newest lots, as many as stand 14 px apart on the usual plot: where a chart opens. */
-export const newestWindow = (lotCount: number, most = 52): LotWindow =>
+/** The newest lots: where a chart opens. */
+export const newestWindow = (lotCount: number, most = NEWEST_LOTS): LotWindow =>
   clampWindow({ from: Math.max(0, lotCount - most), to: lotCount - 1 }, lotCount)
 
 /**

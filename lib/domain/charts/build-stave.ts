@@ -14,6 +14,10 @@ import {
 } from './staff-chart'
 import { staveScale } from './stave-scale'
 
+const ALL: LotWindow = { from: Number.NEGATIVE_INFINITY, to: Number.POSITIVE_INFINITY }
+
+const NONE: readonly string[] = []
+
 const idOf = (signal: ChartSignal): string => String(signal.id)
 
 /** Frozen limits as lines. Without a spread there is nothing to draw but the centre. */
@@ -34,29 +38,58 @@ function segmentOf(set: ChartLimitSet, oneSided: boolean, window: LotWindow): St
   }
 }
 
-const setAt = (sets: readonly ChartLimitSet[], index: number): ChartLimitSet | undefined =>
-  sets.findLast((set) => set.fromIndex <= index && index <= set.toIndex)
+/** What is asked of every lot, looked up once: the limits in force and the signals it is part of. */
+interface StaveFacts {
+  readonly setAt: (index: number) => { readonly set: ChartLimitSet; readonly lines: StaffSegment } | undefined
+  readonly leftOut: ReadonlySet<number>
+  readonly signalsAt: ReadonlyMap<number, readonly ChartSignal[]>
+}
 
-function noteOf(input: StaveInput, lot: ChartLot, index: number, value: number): ChartNote {
-  const set = setAt(input.limitSets, index)
-  const segment = set && segmentOf(set, input.oneSided, { from: index, to: index })
-  const own = input.signals.filter((signal) => signal.members.includes(index))
-  const { upper, lower } = segment ?? {}
+function factsOf(input: StaveInput): StaveFacts {
+  const sets = input.limitSets.map((set) => ({ set, lines: segmentOf(set, input.oneSided, ALL) }))
+  const signalsAt = new Map<number, ChartSignal[]>()
+  for (const signal of input.signals)
+    for (const index of signal.members) {
+      const own = signalsAt.get(index)
+      if (own) own.push(signal)
+      else signalsAt.set(index, [signal])
+    }
+  return {
+    // Sets are in order of lots without overlap: the last one that begins at or before the lot, if it reaches it.
+    setAt: (index) => {
+      let [low, high] = [0, sets.length]
+      while (low < high) {
+        const middle = (low + high) >> 1
+        if ((sets[middle]?.set.fromIndex ?? 0) <= index) low = middle + 1
+        else high = middle
+      }
+      const found = sets[low - 1]
+      return found && index <= found.set.toIndex ? found : undefined
+    },
+    leftOut: new Set(input.leftOut),
+    signalsAt,
+  }
+}
+
+function noteOf(facts: StaveFacts, lot: ChartLot, index: number, value: number): ChartNote {
+  const { set, lines } = facts.setAt(index) ?? {}
+  const own = facts.signalsAt.get(index)
+  const { upper, lower } = lines ?? {}
   return {
     index,
     lotId: lot.lotId,
     code: lot.code,
     value,
     sigmas: set && set.sigma > 0 ? (value - set.centre) / set.sigma : undefined,
-    leftOut: input.leftOut.includes(index),
+    leftOut: facts.leftOut.has(index),
     beyond:
       upper !== undefined && value > upper
         ? 'above'
         : lower !== undefined && value < lower
           ? 'below'
           : undefined,
-    open: own.some(({ rule, state }) => rule === 'beyond-the-limits' && state === 'open'),
-    signals: own.map(idOf),
+    open: own?.some(({ rule, state }) => rule === 'beyond-the-limits' && state === 'open') ?? false,
+    signals: own?.map(idOf) ?? NONE,
   }
 }
 
@@ -97,12 +130,12 @@ export function buildStave(input: StaveInput, lots: readonly ChartLot[], window:
   const segments = input.limitSets
     .filter((set) => set.toIndex >= window.from && set.fromIndex <= window.to)
     .map((set) => segmentOf(set, input.oneSided, window))
-  const notes = lots.slice(window.from, window.to + 1).flatMap((lot, offset): ChartNote[] => {
-    const value = input.values[window.from + offset]
-    return value === undefined || !Number.isFinite(value)
-      ? []
-      : [noteOf(input, lot, window.from + offset, value)]
-  })
+  const facts = factsOf(input)
+  const notes: ChartNote[] = []
+  for (let index = window.from; index <= window.to; index += 1) {
+    const [lot, value] = [lots[index], input.values[index]]
+    if (lot && value !== undefined && Number.isFinite(value)) notes.push(noteOf(facts, lot, index, value))
+  }
   const tolerances = tolerancesOf(input)
   const values = notes.map(({ value }) => value)
   return {

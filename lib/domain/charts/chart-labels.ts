@@ -1,3 +1,4 @@
+import { NARROW_RUN } from './draw-fewer'
 import type { Ink } from './ink'
 import type { StaffLayout, StaveLayout } from './layout-staff-chart'
 import { words } from './marks'
@@ -13,6 +14,9 @@ interface Label {
   readonly role: Role
 }
 
+/** About the room that the words of a run take, px. */
+const RUN_WORDS = 40
+
 /** Words stand at least 3 px off a limit line. */
 const OFF_LINE = 3
 
@@ -21,7 +25,9 @@ const noteBox = ({ x, y: down, note }: PlacedNote, y: number): Box => {
   return { x: x - half, y: y + down - 5, w: 2 * half, h: 10 }
 }
 
-function slurBoxes({ curve }: PlacedSlur, y: number): Box[] {
+function slurBoxes({ curve, top, bottom }: PlacedSlur, y: number): Box[] {
+  const [left, right] = [curve.start[0], curve.end[0]]
+  if (right - left <= NARROW_RUN) return [{ x: left, y: y + top - 1, w: right - left, h: bottom - top + 3 }]
   return Array.from({ length: 32 }, (_, step) => {
     const [x1, y1] = slurPoint(curve, step / 32)
     const [x2, y2] = slurPoint(curve, (step + 1) / 32)
@@ -164,6 +170,16 @@ function noteWishes(stave: StaveLayout, layout: StaffLayout): Wish<Label>[] {
     .map((placed) => noteWish(placed, stave, layout))
 }
 
+/** Words for the unanswered runs first, then for the widest: as many as have room side by side. */
+function runWishes(stave: StaveLayout, { frame }: StaffLayout): Wish<Label>[] {
+  const widthOf = ({ curve }: PlacedSlur): number => curve.end[0] - curve.start[0]
+  const isOpen = ({ slur }: PlacedSlur): number => (slur.state === 'open' ? 1 : 0)
+  return stave.slurs
+    .toSorted((a, b) => isOpen(b) - isOpen(a) || widthOf(b) - widthOf(a))
+    .slice(0, Math.ceil(frame.w / RUN_WORDS))
+    .map((slur) => runWish(slur, stave))
+}
+
 /** Names of tolerances, values of notes beyond their limits, words of runs: where they touch nothing. */
 export function labelShapes(layout: StaffLayout): TextShape[] {
   const { staves, frame, plot, bars } = layout
@@ -191,7 +207,7 @@ export function labelShapes(layout: StaffLayout): TextShape[] {
     ...unlimitedWishes(stave, layout),
     ...toleranceWishes(stave, layout),
     ...noteWishes(stave, layout),
-    ...stave.slurs.map((slur) => runWish(slur, stave)),
+    ...runWishes(stave, layout),
   ])
   const placed = placeLabels(wishes, {
     taken: [

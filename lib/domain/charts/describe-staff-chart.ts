@@ -1,6 +1,15 @@
 import { sigmasText, valueText } from './readout'
 import type { ChartNote, StaffChart, StaveModel } from './staff-chart'
 
+/** More than these of one kind would be a litany; the table and the files have them all. */
+const MOST_TOLD = 12
+
+/** The newest of many, and how many more there are. */
+function told(texts: readonly string[], between: string, rest: (more: number) => string): string {
+  const more = texts.length - MOST_TOLD
+  return [...(more > 0 ? [rest(more)] : []), ...texts.slice(-MOST_TOLD)].join(between)
+}
+
 const count = (many: number, one: string): string => `${many} ${one}${many === 1 ? '' : 's'}`
 
 function staveSentences(stave: StaveModel, chart: StaffChart): string[] {
@@ -20,10 +29,22 @@ function staveSentences(stave: StaveModel, chart: StaffChart): string[] {
     ...(last
       ? [`Last lot ${where(last)}${last.sigmas === undefined ? '' : `, ${sigmasText(last.sigmas, chart)}`}.`]
       : ['No values.']),
-    ...(beyond.length > 0 ? [`Beyond the limits: ${beyond.map(where).join(', ')}.`] : []),
-    ...stave.slurs.map(({ sentence, state }) =>
-      state === 'open' ? sentence : `${sentence} (${state === 'answered' ? 'answered' : 'no longer holds'})`,
-    ),
+    ...(beyond.length > 0
+      ? [`Beyond the limits: ${told(beyond.map(where), ', ', (more) => `${count(more, 'earlier lot')}`)}.`]
+      : []),
+    ...(stave.slurs.length === 0
+      ? []
+      : [
+          told(
+            stave.slurs.map(({ sentence, state }) =>
+              state === 'open'
+                ? sentence
+                : `${sentence} (${state === 'answered' ? 'answered' : 'no longer holds'})`,
+            ),
+            ' ',
+            (more) => `${count(more, 'earlier run')}.`,
+          ),
+        ]),
   ]
 }
 
@@ -42,6 +63,6 @@ export function describeStaffChart(chart: StaffChart): string {
   return [
     `${range}; ${count(chart.staves.length, 'characteristic')}.`,
     ...chart.staves.flatMap((stave) => staveSentences(stave, chart)),
-    ...(bars.length > 0 ? [`Changes: ${bars.join('; ')}.`] : []),
+    ...(bars.length > 0 ? [`Changes: ${told(bars, '; ', (more) => count(more, 'earlier change'))}.`] : []),
   ].join(' ')
 }

@@ -43,6 +43,20 @@ export function plotLayers(layout: StaffLayout): readonly PlotLayer[] {
   ]
 }
 
+/** Names of the staves, beside them or above. */
+export const nameShapes = (layout: StaffLayout): readonly Shape[] =>
+  layout.staves.flatMap(({ column, stave }) =>
+    column.map(
+      ({ x, y, text, kind }): Shape =>
+        words(x, y, text, {
+          ...(kind === 'name' ? { size: 13, weight: 600 } : { ink: 'slate' }),
+          // Above its stave a name lies across bar lines.
+          halo: layout.frame.compact,
+          role: { stave: stave.key },
+        }),
+    ),
+  )
+
 /** What stands around the plot: names of the staves, values at the right, reasons, lot axis. */
 export function marginShapes(layout: StaffLayout): readonly Shape[] {
   const empty =
@@ -50,17 +64,7 @@ export function marginShapes(layout: StaffLayout): readonly Shape[] {
       ? [words(layout.frame.x, layout.plot.y + 16, 'no lots yet', { italic: true, ink: 'slate' })]
       : []
   return [
-    ...layout.staves.flatMap(({ column, stave }) =>
-      column.map(
-        ({ x, y, text, kind }): Shape =>
-          words(x, y, text, {
-            ...(kind === 'name' ? { size: 13, weight: 600 } : { ink: 'slate' }),
-            // Above its stave a name lies across bar lines.
-            halo: layout.frame.compact,
-            role: { stave: stave.key },
-          }),
-      ),
-    ),
+    ...nameShapes(layout),
     ...layout.staves.flatMap((stave) => limitValueShapes(stave, layout)),
     ...footShapes(layout),
     ...empty,

@@ -124,9 +124,12 @@ export function barShapes({ bars, frame, staves }: StaffLayout): Shape[] {
   return [
     ...(opened ? [] : [lines([line(frame.x)], { stroke: 'ink', width: 1.1 })]),
     ...bars.placed.map(
-      ({ bar, xs }): Shape => ({
+      ({ bar, xs, near }): Shape => ({
         kind: 'group',
-        title: [bar.reason, bar.detail].filter((text) => text !== '').join(', '),
+        title: [
+          ...[bar.reason, bar.detail].filter((text) => text !== ''),
+          ...(near === 0 ? [] : [`and ${near} more ${near === 1 ? 'change' : 'changes'} close by`]),
+        ].join(', '),
         role: { mark: 'bar-line', state: bar.kinds.join(' ') },
         shapes: [lines(xs.map(line), { stroke: 'ink', width: 1.1 })],
       }),
@@ -134,8 +137,13 @@ export function barShapes({ bars, frame, staves }: StaffLayout): Shape[] {
   ]
 }
 
+/** What a crowded window cannot show, in words. */
+const hiddenText = (hidden: number, compact: boolean): string =>
+  `${hidden} ${hidden === 1 ? 'signal' : 'signals'} not drawn${compact ? '' : ': where they crowd, the one furthest out stands for its column. Zoom in to see each'}.`
+
 /** Reasons under the last stave, and the lot axis. */
-export function footShapes({ reasons, reasonsY, axis, frame, chart, decimated }: StaffLayout): Shape[] {
+export function footShapes(layout: StaffLayout): Shape[] {
+  const { reasons, reasonsY, axis, frame, chart, decimated, hidden } = layout
   const { from } = chart.window
   const first = chart.lots[from]
   const opens = first && !reasons.some(({ x, row }) => row === 0 && x < frame.x + 90)
@@ -163,5 +171,6 @@ export function footShapes({ reasons, reasonsY, axis, frame, chart, decimated }:
     ...(decimated && !frame.compact
       ? [words(0, axis.y + 27, `${decimated.shown} of ${decimated.of} notes drawn`, { ink: 'slate' })]
       : []),
+    ...(hidden > 0 ? [words(frame.x, axis.y + 45, hiddenText(hidden, frame.compact), { ink: 'slate' })] : []),
   ]
 }

@@ -1,8 +1,9 @@
+import { type DrawnBar, drawnBars } from './draw-fewer'
 import { type ColumnLine, columnHeight, columnText, labelColumn, readingBelow } from './label-column'
 import { type LotTick, lotTicks } from './lot-axis'
 import { type PlotFrame, plotFrame } from './plot-frame'
-import { type PlacedReason, reasonRows } from './reason-rows'
-import type { BarLine, StaffChart } from './staff-chart'
+import { type PlacedReason, rankOf, reasonRows } from './reason-rows'
+import type { StaffChart } from './staff-chart'
 import { type StaveParts, staveParts } from './stave-layout'
 
 export interface StaveLayout extends StaveParts {
@@ -15,9 +16,7 @@ export interface StaveLayout extends StaveParts {
   readonly readout: { readonly valueX: number; readonly sigmaX: number; readonly y: number }
 }
 
-export interface PlacedBar {
-  readonly bar: BarLine
-  readonly x: number
+export interface PlacedBar extends DrawnBar {
   /** A change of limit sets has a second line 3 px before it. */
   readonly xs: readonly number[]
 }
@@ -37,11 +36,15 @@ export interface StaffLayout {
   readonly axis: { readonly y: number; readonly prefix: string; readonly ticks: readonly LotTick[] }
   /** How many notes are drawn, when not all are. */
   readonly decimated?: { readonly shown: number; readonly of: number }
+  /** Signals without a mark of their own. */
+  readonly hidden: number
 }
 
 /** Room for the pointer's flag above the first stave. */
 const FLAG = 22
 const REASON_ROW = 31
+/** Room for the line that says how many signals are not drawn. */
+const HIDDEN_LINE = 18
 
 function stack(
   parts: readonly (readonly [StaveParts, ReturnType<typeof columnText>])[],
@@ -74,7 +77,12 @@ function decimation(
  */
 export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
   const frame = plotFrame(width, chart.window, chart.lots.length)
-  const changes = chart.barLines.map(({ atIndex }) => atIndex)
+  const drawn = drawnBars(
+    chart.barLines,
+    ({ atIndex }) => (atIndex <= chart.window.from ? frame.x : frame.xAt(atIndex - 0.5)),
+    rankOf,
+  )
+  const changes = drawn.map(({ bar }) => bar.atIndex)
   const parts = chart.staves.map((stave, index) =>
     staveParts(stave, frame, chart.window, index === 0, changes),
   )
@@ -97,15 +105,13 @@ export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
   const bars = {
     y1: first ? first.y + first.top : plot.y,
     y2: last ? last.y + last.bottom : plot.y + plot.h,
-    placed: chart.barLines.map((bar): PlacedBar => {
-      const x = bar.atIndex <= chart.window.from ? frame.x : frame.xAt(bar.atIndex - 0.5)
-      return { bar, x, xs: bar.double ? [x - 3, x] : [x] }
-    }),
+    placed: drawn.map((one): PlacedBar => ({ ...one, xs: one.bar.double ? [one.x - 3, one.x] : [one.x] })),
   }
+  const placeOf = new Map(drawn.map(({ bar, x }) => [bar, x]))
   const reasons = reasonRows(
-    chart.barLines,
+    drawn.map(({ bar }) => bar),
     (bar) => {
-      const x = bars.placed.find((one) => one.bar === bar)?.x ?? frame.x
+      const x = placeOf.get(bar) ?? frame.x
       return x === frame.x ? x : x + 3
     },
     frame.x + frame.w + 40,
@@ -113,9 +119,10 @@ export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
   const reasonsY = !last || last.quietBelow ? end - 9 : end + 8
   const rows = Math.max(-1, ...reasons.map(({ row }) => row ?? -1)) + 1
   const axisY = reasonsY + (rows === 0 ? -8 : 22 + (rows - 1) * REASON_ROW)
+  const hidden = parts.reduce((sum, part) => sum + part.hidden, 0)
   return {
     width,
-    height: axisY + 34,
+    height: axisY + 34 + (hidden > 0 ? HIDDEN_LINE : 0),
     chart,
     frame,
     plot,
@@ -125,5 +132,6 @@ export function layoutStaffChart(chart: StaffChart, width = 964): StaffLayout {
     reasonsY,
     axis: { y: axisY, ...lotTicks(chart, frame) },
     decimated: decimation(parts),
+    hidden,
   }
 }

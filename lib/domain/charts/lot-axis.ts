@@ -10,7 +10,7 @@ export interface LotTick {
   readonly day: string
 }
 
-const strides = [1, 2, 3, 6, 12, 24, 48, 60, 120, 240, 480, 1200]
+const strides = [1, 2, 3, 6, 12, 24, 48, 60, 120, 240, 480, 1200, 2400, 6000, 12_000, 24_000, 60_000]
 
 /** What all codes begin with, up to and with their last dash: "LA-"; empty when they differ. */
 export function sharedPrefix(codes: readonly string[]): string {
@@ -29,9 +29,9 @@ export function lotTicks(
   const lots = chart.lots.slice(from, to + 1)
   const prefix = sharedPrefix(lots.map(({ code }) => code))
   const codeOf = (code: string): string => code.slice(prefix.length)
-  const widest = Math.max(
+  const widest = lots.reduce(
+    (most, { code, label }) => Math.max(most, textWidth(codeOf(code), 11), textWidth(label, 11)),
     20,
-    ...lots.map(({ code, label }) => Math.max(textWidth(codeOf(code), 11), textWidth(label, 11))),
   )
   const stride =
     strides.find((lotsApart) => lotsApart * frame.step >= widest + 16) ?? Math.max(1, lots.length)

@@ -1,12 +1,17 @@
-import type { LotWindow } from './staff-chart'
+import { type LotWindow, NEWEST_LOTS } from './staff-chart'
 
 /** Lots stand this far apart; where there are more than fit, closer, and below 12 px not every note is drawn. */
 export const LOT_STEP = 14.2
 export const LEAST_STEP = 12
+/** Lots further apart would no longer be seen as one line. */
+const MOST_STEP = 40
 /** The first lot stands 1.1 steps from the left bar, and a full window leaves as much at its right. */
 const LEAD = 1.1
 /** In a crowded window that would put its head, or its ledger line, onto the bar. */
 const LEAST_LEAD = 11
+
+/** px between the bar and the first lot, for a step in px. */
+export const leadOf = (step: number): number => Math.max(LEAD * step, LEAST_LEAD)
 
 /** The horizontal frame that all staves share. */
 export interface PlotFrame {
@@ -28,7 +33,8 @@ const NARROW = 600
 
 /**
  * Fits the lots of a window to a page `width` px wide. A window that ends at the newest lot keeps 14.2 px a lot
- * and leaves the rest of the plot for lots still to be made; any other window fills the plot.
+ * and leaves the rest of the plot for lots still to be made, unless somebody has zoomed in to fewer lots than a
+ * chart opens with; any other window fills the plot.
  */
 export function plotFrame(width: number, window: LotWindow, lotCount: number): PlotFrame {
   const compact = width < NARROW
@@ -38,8 +44,9 @@ export function plotFrame(width: number, window: LotWindow, lotCount: number): P
   const even = w / (Math.max(0, count) - 1 + 2 * LEAD)
   const fit = even * LEAD < LEAST_LEAD ? (w - 2 * LEAST_LEAD) / (count - 1) : even
   const isNewest = window.to >= lotCount - 1
-  const step = Math.min(isNewest ? LOT_STEP : 40, count > 0 ? fit : LOT_STEP)
-  const left = window.from - Math.max(LEAD, LEAST_LEAD / step)
+  const isUsual = isNewest && (window.from <= 0 || count >= NEWEST_LOTS)
+  const step = Math.min(isUsual ? LOT_STEP : MOST_STEP, count > 0 ? fit : LOT_STEP)
+  const left = window.from - leadOf(step) / step
   const xAt = (index: number): number => x + (index - left) * step
   const end = xAt(window.to) + step / 2
   return {

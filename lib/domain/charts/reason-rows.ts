@@ -24,7 +24,8 @@ const ranks: Readonly<Record<BarLineKind, number>> = {
   spool: 3,
 }
 
-const rankOf = ({ kinds }: BarLine): number => Math.min(...kinds.map((kind) => ranks[kind]))
+/** The lower, the earlier a bar line and its reason choose their place. */
+export const rankOf = ({ kinds }: BarLine): number => Math.min(...kinds.map((kind) => ranks[kind]))
 
 /**
  * Reasons stand under their bar lines in one row, or in a second one where the first is taken; what fits in

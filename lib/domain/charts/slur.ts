@@ -209,6 +209,10 @@ export function fitSlur(notes: readonly Point[], side: -1 | 1): SlurCurve | unde
   return curveOf(first, last, side, e1, e2, height)
 }
 
+/** A small slur of a fixed shape over one place: for a run too narrow to follow its notes. */
+export const smallSlur = (x: number, y: number, side: -1 | 1, width: number): SlurCurve =>
+  curveOf([x - width / 2, y], [x + width / 2, y], side, END_OFFSET, END_OFFSET, LEAST_HEIGHT)
+
 /**
  * Offsets to try at an end, px off its note: 8 to 30 in steps of two, then in wider steps up to where the end
  * stands clear above the furthest note, which lies `reach` px further out. A long run may climb steeply beside its

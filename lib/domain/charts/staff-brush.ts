@@ -1,7 +1,7 @@
 import { clampWindow } from './build-staff-chart'
 import { lines, words } from './marks'
 import type { Shape } from './shape'
-import type { LotWindow, StaffChartInput } from './staff-chart'
+import type { ChartLot, ChartSignal, LotWindow, StaffChartInput } from './staff-chart'
 import { textWidth } from './text-width'
 
 /** The overview of all lots under a chart: 40 px high, labels beneath. */
@@ -26,7 +26,44 @@ const middleOf = (values: readonly number[]): number => {
   return sorted[Math.floor(sorted.length / 2)] ?? 0
 }
 
-/** Ticks of the first stave: all lots, between its own extremes; runs of equal marks in one path. */
+type Ends = readonly [number, number, number, number]
+
+/** One upright tick for each value, or from the lowest to the highest of those that share a px. */
+function ticks(
+  values: readonly { readonly value: number; readonly index: number }[],
+  xAt: (index: number) => number,
+  yAt: (value: number) => number,
+): Ends[] {
+  const columns = new Map<number, { x: number; y1: number; y2: number }>()
+  for (const { value, index } of values) {
+    const [x, y] = [xAt(index), yAt(value)]
+    const before = columns.get(Math.floor(x))
+    if (before) {
+      before.y1 = Math.min(before.y1, y)
+      before.y2 = Math.max(before.y2, y)
+    } else columns.set(Math.floor(x), { x, y1: y, y2: y })
+  }
+  return [...columns.values()].map(({ x, y1, y2 }) => [x, y1 - 1.6, x, y2 + 1.6])
+}
+
+/** Bars of signals; those that would lie on the one before become part of it. */
+function signalBars(signals: readonly ChartSignal[], xAt: (index: number) => number): Ends[] {
+  const ends = signals
+    .map(({ members }) => [xAt(members[0] ?? 0) - 1, xAt(members.at(-1) ?? 0) + 1] as const)
+    .sort(([a], [b]) => a - b)
+  const bars: [number, number][] = []
+  for (const [from, to] of ends) {
+    const last = bars.at(-1)
+    if (last && from - last[1] < 1) last[1] = Math.max(last[1], to)
+    else bars.push([from, to])
+  }
+  return bars.map(([from, to]) => [from, TOP + 2, to, TOP + 2])
+}
+
+/**
+ * All lots of the first stave, between its own extremes, in one path a colour: no more ticks than the overview has
+ * px of width, each column with its highest and lowest.
+ */
 function overview(input: StaffChartInput, xAt: (index: number) => number): Shape[] {
   const stave = input.staves[0]
   if (!stave) return []
@@ -34,24 +71,19 @@ function overview(input: StaffChartInput, xAt: (index: number) => number): Shape
     value === undefined || !Number.isFinite(value) ? [] : [{ value, index }],
   )
   const middle = stave.limitSets.at(-1)?.centre ?? middleOf(values.map(({ value }) => value))
-  const reach = Math.max(0, ...values.map(({ value }) => Math.abs(value - middle)))
+  const reach = values.reduce((most, { value }) => Math.max(most, Math.abs(value - middle)), 0)
   const yAt = (value: number): number => TOP + 20 - (reach > 0 ? ((value - middle) / reach) * 15 : 0)
   return [
     lines(
       [8, 14, 20, 26, 32].map((y) => [xAt(0) - 4, TOP + y, xAt(input.lots.length - 1) + 4, TOP + y] as const),
       { stroke: 'staff', width: 0.5 },
     ),
-    lines(
-      values.map(({ value, index }) => [xAt(index), yAt(value) - 1.6, xAt(index), yAt(value) + 1.6] as const),
-      { stroke: 'ink', width: 2.2 },
-    ),
+    lines(ticks(values, xAt, yAt), { stroke: 'ink', width: xAt(1) - xAt(0) < 2 ? 1 : 2.2 }),
     ...(['answered', 'open'] as const).flatMap((state) => {
-      const bars = stave.signals
-        .filter((signal) => signal.state === state)
-        .map(
-          ({ members }) =>
-            [xAt(members[0] ?? 0) - 1, TOP + 2, xAt(members.at(-1) ?? 0) + 1, TOP + 2] as const,
-        )
+      const bars = signalBars(
+        stave.signals.filter((signal) => signal.state === state),
+        xAt,
+      )
       return bars.length > 0
         ? [lines(bars, { stroke: state === 'open' ? 'vermilion' : 'slate', width: 2 })]
         : []
@@ -60,13 +92,51 @@ function overview(input: StaffChartInput, xAt: (index: number) => number): Shape
 }
 
 /** The year at the end of a month's name. */
-const YEAR = / \d{4}$/
+const YEAR = / (\d{4})$/
+
+/** A month's name and the room beside it, px: where months have less they would be named here and there. */
+const MONTH_ROOM = 42
+
+/** Years where they begin, or nothing when months have room, or when no month tells its year. */
+function yearMarks(lots: readonly ChartLot[], w: number): readonly (readonly [number, string])[] {
+  const marks: (readonly [number, string])[] = []
+  let months = 0
+  let before: string | undefined
+  lots.forEach(({ monthLabel }, index) => {
+    if (monthLabel === undefined || monthLabel === before) return
+    before = monthLabel
+    months += 1
+    const year = YEAR.exec(monthLabel)?.[1]
+    if (year !== undefined && year !== marks.at(-1)?.[1]) marks.push([index, year])
+  })
+  return marks.length > 1 && months * MONTH_ROOM > w ? marks : []
+}
+
+/** Labels where something begins, as many as stand clear of each other. */
+function yearLabels(
+  marks: readonly (readonly [number, string])[],
+  xAt: (index: number) => number,
+  right: number,
+): Shape[] {
+  let free = Number.NEGATIVE_INFINITY
+  return marks.flatMap(([index, year]): Shape[] => {
+    const [x, w] = [xAt(index), textWidth(year, 11)]
+    if (x < free || x + w > right) return []
+    free = x + w + 14
+    return [
+      lines([[x, TOP + BRUSH_HEIGHT, x, TOP + BRUSH_HEIGHT + 5]], { stroke: 'edge' }),
+      words(x, TOP + BRUSH_HEIGHT + 17, year, { ink: 'slate' }),
+    ]
+  })
+}
 
 /**
  * Names of months (or days, where no lot names a month) where they change, as many as stand clear of each other;
- * a year is said once.
+ * a year is said once. Years alone where months would be too dense.
  */
 function monthLabels(input: StaffChartInput, xAt: (index: number) => number, right: number): Shape[] {
+  const years = yearMarks(input.lots, right - xAt(0))
+  if (years.length > 0) return yearLabels(years, xAt, right)
   const shapes: Shape[] = []
   const hasMonths = input.lots.some(({ monthLabel }) => monthLabel !== undefined)
   let free = Number.NEGATIVE_INFINITY

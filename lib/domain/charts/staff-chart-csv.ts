@@ -1,3 +1,4 @@
+import { noteAt } from './note-at'
 import type { StaffChart, StaveModel } from './staff-chart'
 
 export type CsvCell = string | number | undefined
@@ -27,23 +28,23 @@ export function staffChartRows(chart: StaffChart): readonly (readonly CsvCell[])
     ),
     'change',
   ]
+  const changes = new Map(chart.barLines.map((bar) => [bar.atIndex, bar]))
   const rows = chart.lots.slice(from, to + 1).map((lot, offset) => {
     const index = from + offset
     return [
       lot.code,
       new Date(lot.madeAt).toISOString(),
       ...chart.staves.flatMap((stave) => staveCells(stave, index)),
-      chart.barLines
-        .filter(({ atIndex }) => atIndex === index)
-        .map(({ reason, detail }) => [reason, detail].filter((text) => text !== '').join(', '))
-        .join('; '),
+      [changes.get(index)?.reason ?? '', changes.get(index)?.detail ?? '']
+        .filter((text) => text !== '')
+        .join(', '),
     ]
   })
   return [head, ...rows]
 }
 
 function staveCells(stave: StaveModel, index: number): CsvCell[] {
-  const note = stave.notes.find((one) => one.index === index)
+  const note = noteAt(stave, index)
   const segment = stave.segments.find(({ fromIndex, toIndex }) => index >= fromIndex && index <= toIndex)
   const unit = stave.unitLabel.split(',')[0] ?? ''
   return [

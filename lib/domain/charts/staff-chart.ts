@@ -103,6 +103,9 @@ export interface StaffChartInput extends ReadoutFormat {
   readonly window?: LotWindow
 }
 
+/** Lots that a chart opens with: as many as stand 14.2 px apart on the usual plot. */
+export const NEWEST_LOTS = 52
+
 /** Below this many lots no limits are frozen and none are drawn. */
 export const LOTS_FOR_LIMITS = 20
 

@@ -1,7 +1,9 @@
 import type { StaffLayout } from './layout-staff-chart'
 import { lines, NOTE_TURN, words } from './marks'
+import { noteAt } from './note-at'
 import { sigmasText, valueText } from './readout'
 import type { Shape } from './shape'
+import type { BarLine } from './staff-chart'
 import { textWidth } from './text-width'
 
 /** What the pointer reads at one lot. */
@@ -9,6 +11,8 @@ export interface PointerReading {
   readonly index: number
   readonly code: string
   readonly day: string
+  /** What changed before this lot; empty when nothing did. */
+  readonly change: string
   readonly staves: readonly {
     readonly key: string
     readonly label: string
@@ -16,6 +20,9 @@ export interface PointerReading {
     readonly sigmas: string
   }[]
 }
+
+const changeAt = ({ chart }: StaffLayout, index: number): BarLine | undefined =>
+  chart.barLines.find(({ atIndex }) => atIndex === index)
 
 /** The reading of one lot over all staves; undefined when there is no such lot. */
 export function readLot(layout: StaffLayout, index: number): PointerReading | undefined {
@@ -26,8 +33,9 @@ export function readLot(layout: StaffLayout, index: number): PointerReading | un
     index,
     code: lot.code,
     day: lot.label,
+    change: changeAt(layout, index)?.reason ?? '',
     staves: chart.staves.map((stave) => {
-      const note = stave.notes.find((one) => one.index === index)
+      const note = noteAt(stave, index)
       return {
         key: stave.key,
         label: stave.label,
@@ -40,7 +48,7 @@ export function readLot(layout: StaffLayout, index: number): PointerReading | un
 
 /** The reading as one line of words, for screen readers. */
 export const readingText = (reading: PointerReading): string =>
-  `${reading.code}, ${reading.day}: ${reading.staves
+  `${reading.code}, ${reading.day}${reading.change === '' ? '' : `, ${reading.change}`}: ${reading.staves
     .map(({ label, value, sigmas }) => `${label} ${value}${sigmas === '' ? '' : `, ${sigmas}`}`)
     .join('; ')}`
 
@@ -58,7 +66,7 @@ export function pointerShapes(layout: StaffLayout, index: number): readonly Shap
   const x = frame.xAt(index)
   const role = { mark: 'pointer', lot: lot.code } as const
   const rings = staves.flatMap(({ stave, y, yAt, top, bottom }) => {
-    const note = stave.notes.find((one) => one.index === index)
+    const note = noteAt(stave, index)
     // Where the note itself would stand: also for one that is not drawn in a crowded window.
     return note === undefined
       ? []
@@ -91,11 +99,25 @@ export function pointerShapes(layout: StaffLayout, index: number): readonly Shap
   ]
 }
 
+/** What changed before the lot, where its own reason found no room below: over what stands there. */
+function changeShapes(layout: StaffLayout, index: number): readonly Shape[] {
+  const { reasons, reasonsY, frame, width } = layout
+  const bar = changeAt(layout, index)
+  if (!bar || reasons.some((one) => one.bar === bar && one.row !== undefined)) return []
+  const w = Math.max(textWidth(bar.reason, 13, 'italic') * 1.04, textWidth(bar.detail, 11)) + 8
+  const x = Math.max(0, Math.min(frame.xAt(index - 0.5), width - w))
+  return [
+    { kind: 'rect', x, y: reasonsY - 14, w, h: 35, fill: 'paper' },
+    words(x + 4, reasonsY, bar.reason, { italic: true, ink: 'brass' }),
+    words(x + 4, reasonsY + 15, bar.detail, { ink: 'slate' }),
+  ]
+}
+
 /** Values never float: they stand in the label column of their stave, with the distance in σ. */
 export function readingShapes(layout: StaffLayout, index: number): readonly Shape[] {
   const reading = readLot(layout, index)
   if (!reading) return []
-  return layout.staves.flatMap(({ readout, stave }): Shape[] => {
+  const values = layout.staves.flatMap(({ readout, stave }): Shape[] => {
     const own = reading.staves.find(({ key }) => key === stave.key)
     if (!own) return []
     const anchor = layout.frame.compact ? ('end' as const) : ('start' as const)
@@ -114,4 +136,5 @@ export function readingShapes(layout: StaffLayout, index: number): readonly Shap
       }),
     ]
   })
+  return [...changeShapes(layout, index), ...values]
 }

@@ -13,12 +13,18 @@ const LEAST_SHARE = 3
 
 const isUsable = (perSpace: number): boolean => Number.isFinite(perSpace) && perSpace > 0
 
+/** Not as arguments of one call: a works of many years has more values than a call takes. */
+const largest = (values: readonly number[]): number =>
+  values.reduce((most, value) => Math.max(most, value), Number.NEGATIVE_INFINITY)
+const smallest = (values: readonly number[]): number =>
+  values.reduce((least, value) => Math.min(least, value), Number.POSITIVE_INFINITY)
+
 const widest = (values: readonly number[]): number =>
-  values.length === 0 ? 0 : Math.max(...values) - Math.min(...values)
+  values.length === 0 ? 0 : largest(values) - smallest(values)
 
 /** The distance from the middle within which all values but the furthest twentieth lie (at least one may be). */
 function followed(values: readonly number[], middle: number): number {
-  const distances = values.map((value) => Math.abs(value - middle)).sort((a, b) => a - b)
+  const distances = Float64Array.from(values, (value) => Math.abs(value - middle)).sort()
   return distances[distances.length - 2 - Math.floor(distances.length / 20)] ?? 0
 }
 
@@ -47,11 +53,14 @@ export function staveScale(
     return { middle: newest.centre, perSpace: Math.max(perSpace, Math.min(far, LEAST_SHARE * perSpace)) }
   }
   const limits = tolerances.map(({ value }) => value)
-  const middleOf = (all: readonly number[]): number => (Math.max(...all) + Math.min(...all)) / 2
+  const middleOf = (all: readonly number[]): number => (largest(all) + smallest(all)) / 2
   const middle =
     newest?.centre ??
     (limits.length === 2 ? middleOf(limits) : values.length > 0 ? middleOf(values) : (limits[0] ?? 0))
-  const extent = Math.max(widest(limits), 2 * Math.max(0, ...values.map((value) => Math.abs(value - middle))))
+  const extent = Math.max(
+    widest(limits),
+    2 * largest([0, ...values.map((value) => Math.abs(value - middle))]),
+  )
   const perSpace = extent / 6
   return { middle, perSpace: isUsable(perSpace) ? perSpace : lastPlace(decimals) }
 }
