@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { codeText } from './plain-text'
 
-export const chartFormats = ['svg', 'png', 'csv'] as const
+export const chartFormats = ['svg', 'png', 'csv', 'pdf'] as const
 export type ChartFormat = (typeof chartFormats)[number]
 
 /** How a saved chart looks: which lots (both ends included), which staves, how wide, on which ground. */

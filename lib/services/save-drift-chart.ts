@@ -10,6 +10,7 @@ import { problem } from '@/lib/domain/errors'
 import type { ChartFileInput, ChartFormat } from '@/lib/input/chart-file'
 import { parseStaves } from '@/lib/input/drift-view'
 import { csvText } from '@/lib/output/csv'
+import { type DriftPaper, driftPdf } from '@/lib/output/drift-pdf'
 import { svgToPng } from '@/lib/output/svg-to-png'
 import { getDrift } from './get-drift'
 
@@ -19,15 +20,27 @@ export interface ChartFile {
   readonly content: string | Uint8Array
 }
 
+/** Whose chart a file shows: what the chart does not know of itself. */
+export interface ChartFileFacts {
+  /** What the file is called by: the code of a product or a machine. */
+  readonly code: string
+  /** Names of the products whose lots are on it. */
+  readonly products: readonly string[]
+  readonly works: string
+  readonly timeZone: string
+  readonly at: number
+}
+
 const types: Readonly<Record<ChartFormat, string>> = {
   svg: 'image/svg+xml; charset=utf-8',
   png: 'image/png',
   csv: 'text/csv; charset=utf-8; header=present',
+  pdf: 'application/pdf',
 }
 
 /**
- * The staff chart of a product as a file: the same chart as on the page, as a drawing, a picture or its data.
- * Without lots named, all there are.
+ * The staff chart of a product as a file: the same chart as on the page, as a drawing, a picture, a document of
+ * paper or its data. Without lots named, all there are.
  * @throws LedgerlineError not-permitted, not-found, bad-input
  */
 export async function saveDriftChart(
@@ -35,13 +48,36 @@ export async function saveDriftChart(
   productCode: string,
   format: ChartFormat,
   input: ChartFileInput,
+  at: number = Date.now(),
 ): Promise<ChartFile> {
-  const { chart: drift, product } = await getDrift(actor, productCode, parseStaves(input.staves))
+  const { chart, product, works } = await getDrift(actor, productCode, parseStaves(input.staves))
+  return staffChartFile(chart, format, input, {
+    code: product.code,
+    products: [product.name],
+    works: works.name,
+    timeZone: works.timeZone,
+    at,
+  })
+}
+
+/**
+ * Any staff chart as a file, whatever its lots have in common.
+ * @throws LedgerlineError not-found, bad-input
+ */
+export async function staffChartFile(
+  drift: StaffChartInput,
+  format: ChartFormat,
+  input: ChartFileInput,
+  facts: ChartFileFacts,
+): Promise<ChartFile> {
   const chart = buildStaffChart({ ...drift, window: windowOf(drift, input) })
   return {
-    name: nameOf(product.code, chart, format),
+    name: nameOf(facts.code, chart, format),
     type: types[format],
-    content: contentOf(chart, format, input),
+    content:
+      format === 'pdf'
+        ? await driftPdf(chart, paperOf(drift, chart.window, facts))
+        : contentOf(chart, format, input),
   }
 }
 
@@ -63,19 +99,46 @@ function windowOf({ lots }: StaffChartInput, { from, to }: ChartFileInput): LotW
   return window
 }
 
-function nameOf(productCode: string, { lots, window }: StaffChart, format: ChartFormat): string {
+function nameOf(code: string, { lots, window }: StaffChart, format: ChartFormat): string {
   const [first, last] = [lots[window.from]?.code, lots[window.to]?.code]
   const span =
     first === undefined || last === undefined ? '' : first === last ? ` ${first}` : ` ${first} to ${last}`
-  return `${productCode}${span}.${format}`
+  return `${code}${span}.${format}`
 }
 
 function contentOf(
   chart: StaffChart,
-  format: ChartFormat,
+  format: Exclude<ChartFormat, 'pdf'>,
   { theme, width }: ChartFileInput,
 ): string | Uint8Array {
   if (format === 'csv') return csvText(staffChartRows(chart))
   const svg = svgText(drawStaffChart(layoutStaffChart(chart, width)), { theme: themes[theme], ground: true })
   return format === 'svg' ? svg : svgToPng(svg)
+}
+
+/** What the paper says beside the chart: the unanswered signals that a lot of the window takes part in. */
+function paperOf(
+  { staves }: StaffChartInput,
+  { from, to }: LotWindow,
+  { products, works, timeZone, at }: ChartFileFacts,
+): DriftPaper {
+  const days = new Intl.DateTimeFormat('en-GB', {
+    day: 'numeric',
+    month: 'short',
+    year: 'numeric',
+    timeZone,
+  })
+  return {
+    works,
+    products,
+    signals: staves.flatMap(({ label, signals }) =>
+      signals
+        .filter(
+          ({ state, members }) => state === 'open' && members.some((index) => index >= from && index <= to),
+        )
+        .map(({ sentence }) => ({ stave: label, sentence })),
+    ),
+    printedAt: at,
+    day: (instant) => days.format(instant),
+  }
 }

@@ -86,6 +86,9 @@ export function DriftChart({ productCode, input, staves, lot }: Props) {
           <a href={file('png')} download>
             picture (PNG)
           </a>
+          <a href={file('pdf')} download>
+            document (PDF)
+          </a>
           <a href={file('csv')} download>
             data (CSV)
           </a>

@@ -1,0 +1,3 @@
+import { chartFile } from '../../_chart-file'
+
+export const GET = chartFile('pdf')
