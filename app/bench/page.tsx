@@ -100,7 +100,10 @@ export default roomPage(async (actor) => {
                       .filter((one) => one.active)
                       .map(({ code, name }) => ({ value: code, label: `${name} (${code})` }))}
                   />
-                  <MaterialFields materials={materialsIn} />
+                  <MaterialFields
+                    materials={materialsIn}
+                    wound={products.some(({ construction }) => construction !== 'plain')}
+                  />
                   <NumberField name="lengthMetres" label="Length of the lot" unit="m" optional />
                 </div>
                 <div className="actions">

@@ -10,10 +10,19 @@ const labels: Readonly<Record<LotMaterialRole, string>> = {
   resin: 'Resin batch',
 }
 
+interface Props {
+  /** What is in use. */
+  readonly materials: readonly MaterialInChoice[]
+  /** Whether the works makes strings with a wrap. */
+  readonly wound: boolean
+}
+
+const isWrap = (role: LotMaterialRole): boolean => role === 'wrap-1' || role === 'wrap-2'
+
 /** One choice for each role that something in use fits; splices are named on the lot's page later. */
-export function MaterialFields({ materials }: { readonly materials: readonly MaterialInChoice[] }) {
+export function MaterialFields({ materials, wound }: Props) {
   return lotMaterialRoles.map((role) => {
-    const fitting = materials.filter(({ kind }) => fitsRole(kind, role))
+    const fitting = wound || !isWrap(role) ? materials.filter(({ kind }) => fitsRole(kind, role)) : []
     return fitting.length === 0 ? null : (
       <SelectField
         key={role}

@@ -91,6 +91,7 @@ function NewestLots({
             head: 'Length',
             unit: 'm',
             number: true,
+            wideOnly: true,
             cell: ({ lengthMetres }) =>
               formatNumber(lengthMetres, { decimals: 0, decimal: works.numberFormat }),
           },

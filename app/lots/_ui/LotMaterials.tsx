@@ -1,7 +1,7 @@
 import Link from 'next/link'
+import { formatAlong } from '@/app/_ui/format/along'
 import { Table } from '@/app/_ui/tables/Table'
 import { lotMaterialWords, materialInWords } from '@/lib/domain/record/material-in'
-import { formatNumber } from '@/lib/domain/units/format'
 import type { LotView } from '@/lib/services/get-lot'
 import type { MaterialInChoice } from '@/lib/services/list-materials-in'
 import { LotMaterialsForm } from './LotMaterialsForm'
@@ -20,8 +20,6 @@ const pathOf = (code: string): string => `/materials-in/${encodeURIComponent(cod
 /** Coils, spools and batches that a lot is made of, and the form to say it anew. */
 export function LotMaterials({ view, maySeeMaterials, choices }: Props) {
   const { lot, materials, works } = view
-  const metre = (value: number | undefined) =>
-    formatNumber(value, { decimals: 0, decimal: works.numberFormat })
   const link = (code: string) => (maySeeMaterials ? <Link href={pathOf(code)}>{code}</Link> : code)
   return (
     <section className="section">
@@ -43,8 +41,12 @@ export function LotMaterials({ view, maySeeMaterials, choices }: Props) {
               head: 'Wound from',
               cell: ({ parentCode }) => (parentCode === undefined ? '–' : link(parentCode)),
             },
-            { head: 'From', unit: 'm', number: true, cell: ({ fromMetre }) => metre(fromMetre) },
-            { head: 'To', unit: 'm', number: true, cell: ({ toMetre }) => metre(toMetre) },
+            {
+              head: 'Along the lot',
+              unit: 'm',
+              number: true,
+              cell: ({ fromMetre, toMetre }) => formatAlong(fromMetre, toMetre, works.numberFormat),
+            },
           ]}
         />
       )}

@@ -67,22 +67,30 @@ export default roomPage(async (actor, { params }) => {
           ) : undefined
         }
       />
-      <MaterialInFacts row={row} works={works} />
-      {row.kind === 'coil' ? <SpoolsWound spools={view.spools} works={works} /> : null}
+      {row.kind === 'coil' ? (
+        <div className="columns even">
+          <MaterialInFacts row={row} works={works} />
+          <SpoolsWound spools={view.spools} works={works} />
+        </div>
+      ) : (
+        <MaterialInFacts row={row} works={works} />
+      )}
       <MadeOf view={view} works={works} maySeeDrift={may(actor, 'drift.read')} />
       {keeps ? (
         <section className="section">
-          <h2>Change what is known of it</h2>
-          <MaterialInForm
-            action={updateMaterialInAction.bind(null, row.code)}
-            works={works}
-            row={row}
-            materials={materials}
-            coils={coils}
-          />
+          <details className="materials-in-change">
+            <summary>Change what is known of it</summary>
+            <MaterialInForm
+              action={updateMaterialInAction.bind(null, row.code)}
+              works={works}
+              row={row}
+              materials={materials}
+              coils={coils}
+            />
+          </details>
         </section>
       ) : (
-        <p className="small">Quality keeps the list of materials in.</p>
+        <p className="small materials-in-change">Quality keeps the list of materials in.</p>
       )}
     </>
   )

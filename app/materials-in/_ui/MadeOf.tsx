@@ -1,5 +1,6 @@
 import Link from 'next/link'
 import { VerdictMark } from '@/app/_ui/charts/VerdictMark'
+import { formatAlong } from '@/app/_ui/format/along'
 import { formatDateTime } from '@/app/_ui/format/dates'
 import { Table } from '@/app/_ui/tables/Table'
 import { stateWords } from '@/app/lots/state-words'
@@ -19,7 +20,6 @@ interface Props {
 /** Lots made of a coil, spool or batch, with the way to their charts. */
 export function MadeOf({ view, works: { numberFormat: decimal, timeZone }, maySeeDrift }: Props) {
   const { madeOf, links, row } = view
-  const metre = (value: number | undefined) => formatNumber(value, { decimals: 0, decimal })
   const products = new Map(madeOf.map((one) => [one.productCode, one]))
   const throughSpools = view.spools.length > 0
   return (
@@ -33,17 +33,19 @@ export function MadeOf({ view, works: { numberFormat: decimal, timeZone }, maySe
             </small>
           ) : null}
         </h2>
-        {maySeeDrift
-          ? [...products.values()].map((one) => (
-              <Link
-                key={one.productCode}
-                className="button quiet"
-                href={`/drift?product=${encodeURIComponent(one.productCode)}&lot=${encodeURIComponent(one.lotCode)}`}
-              >
-                {one.productName} on the staff chart
-              </Link>
-            ))
-          : null}
+        <span className="actions">
+          {maySeeDrift
+            ? [...products.values()].map((one) => (
+                <Link
+                  key={one.productCode}
+                  className="button quiet"
+                  href={`/drift?product=${encodeURIComponent(one.productCode)}&lot=${encodeURIComponent(one.lotCode)}`}
+                >
+                  {one.productName} on the staff chart
+                </Link>
+              ))
+            : null}
+        </span>
       </header>
       {madeOf.length === 0 ? (
         <p className="slate">No lot names it. Lots say what they are made of when they are opened.</p>
@@ -60,7 +62,7 @@ export function MadeOf({ view, works: { numberFormat: decimal, timeZone }, maySe
             },
             { head: 'Product', cell: ({ productName }) => productName },
             { head: 'Made', cell: ({ madeAt }) => formatDateTime(madeAt, timeZone) },
-            { head: 'As', cell: ({ role }) => lotMaterialWords[role] },
+            { head: 'As', wideOnly: true, cell: ({ role }) => lotMaterialWords[role] },
             ...(throughSpools
               ? [
                   {
@@ -70,14 +72,18 @@ export function MadeOf({ view, works: { numberFormat: decimal, timeZone }, maySe
                   },
                 ]
               : []),
-            { head: 'From', unit: 'm', number: true, cell: ({ fromMetre }) => metre(fromMetre) },
-            { head: 'To', unit: 'm', number: true, cell: ({ toMetre }) => metre(toMetre) },
+            {
+              head: 'Along the lot',
+              unit: 'm',
+              number: true,
+              cell: ({ fromMetre, toMetre }) => formatAlong(fromMetre, toMetre, decimal),
+            },
             {
               head: 'Lot length',
               unit: 'm',
               number: true,
               wideOnly: true,
-              cell: ({ lengthMetres }) => metre(lengthMetres),
+              cell: ({ lengthMetres }) => formatNumber(lengthMetres, { decimals: 0, decimal }),
             },
             {
               head: 'State',

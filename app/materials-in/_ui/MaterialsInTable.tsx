@@ -52,6 +52,7 @@ export function MaterialsInTable({ rows, works: { numberFormat: decimal, units }
         },
         {
           head: 'Came in',
+          wideOnly: true,
           cell: ({ receivedAt }) => (receivedAt === undefined ? '–' : dayOf(receivedAt)),
         },
         { head: 'Lots', number: true, cell: ({ lots }) => lots },

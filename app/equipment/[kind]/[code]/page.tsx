@@ -70,6 +70,19 @@ export default roomPage(async (actor, { params }) => {
   const works = await getWorks(actor)
   const { row, fields, made } = await find(kind, params.code ?? '', actor, works)
   const keeps = may(actor, 'equipment.keep')
+  const form = (
+    <ActionForm action={updateEquipmentAction.bind(null, kind, row.code)} label={row.code}>
+      <fieldset disabled={!keeps}>{fields}</fieldset>
+      {keeps ? (
+        <div className="actions">
+          <Submit>Save {row.code}</Submit>
+          <span className="small">Results already computed keep what they rest on.</span>
+        </div>
+      ) : (
+        <p className="small">Quality keeps the equipment list.</p>
+      )}
+    </ActionForm>
+  )
   return (
     <>
       <PageHead
@@ -91,17 +104,14 @@ export default roomPage(async (actor, { params }) => {
         }
       />
       {made}
-      <ActionForm action={updateEquipmentAction.bind(null, kind, row.code)} label={row.code}>
-        <fieldset disabled={!keeps}>{fields}</fieldset>
-        {keeps ? (
-          <div className="actions">
-            <Submit>Save {row.code}</Submit>
-            <span className="small">Results already computed keep what they rest on.</span>
-          </div>
-        ) : (
-          <p className="small">Quality keeps the equipment list.</p>
-        )}
-      </ActionForm>
+      {made ? (
+        <section className="section">
+          <h2>What is known of it</h2>
+          {form}
+        </section>
+      ) : (
+        form
+      )}
     </>
   )
 })
