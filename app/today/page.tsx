@@ -19,12 +19,16 @@ export default roomPage(async (actor) => {
   return (
     <>
       <PageHead over={formatLongDate(at, works.timeZone)} title={headline} />
-      {figures ? <DayFigures {...figures} /> : null}
-      {bands.length === 0 ? (
-        <NothingWaits actor={actor} />
-      ) : (
-        bands.map((band) => <WaitingBand key={band.urgency} {...band} />)
-      )}
+      <div className="columns">
+        <div>
+          {bands.length === 0 ? (
+            <NothingWaits actor={actor} />
+          ) : (
+            bands.map((band) => <WaitingBand key={band.urgency} {...band} />)
+          )}
+        </div>
+        <aside>{figures ? <DayFigures {...figures} /> : null}</aside>
+      </div>
     </>
   )
 })

@@ -194,13 +194,13 @@ export const listBodies = async (
     ]),
   )
 
-/** How many lots were made, measured and decided from a moment on. */
-export async function countDay(tx: Tx, from: number) {
-  const since = new Date(from)
-  const decided = { decidedAt: { gte: since } }
+/** How many lots were made, measured and decided from one moment to another. */
+export async function countDay(tx: Tx, from: number, to: number) {
+  const within = { gte: new Date(from), lte: new Date(to) }
+  const decided = { decidedAt: within }
   return {
-    made: await tx.lot.count({ where: { madeAt: { gte: since } } }),
-    measured: await tx.lot.count({ where: { measuredAt: { gte: since } } }),
+    made: await tx.lot.count({ where: { madeAt: within } }),
+    measured: await tx.lot.count({ where: { measuredAt: within } }),
     released: await tx.disposition.count({ where: { ...decided, verb: 'release' } }),
     firstDecided: await tx.disposition.count({ where: { ...decided, number: 1 } }),
     rightFirstTime: await tx.disposition.count({ where: { ...decided, number: 1, verb: 'release' } }),

@@ -14,7 +14,7 @@ import { getWorks } from './get-works'
 import { benchOfToday } from './today-bench'
 import { equipmentOfToday } from './today-equipment'
 import { failedImportsOfToday, importRowsOfToday } from './today-imports'
-import type { AskedToday, FoundToday, WaitingItem, WaitingTotal } from './today-item'
+import { type AskedToday, type FoundToday, SHOWN, type WaitingItem, type WaitingTotal } from './today-item'
 import { limitsOfToday } from './today-limits'
 import { lotsOfToday } from './today-lots'
 import { backupOfToday, peopleOfToday } from './today-people'
@@ -66,8 +66,8 @@ export async function getToday(actor: Actor | undefined, at: number = Date.now()
   const totals = found.flatMap((one) => one.totals)
   const figures = may(actor, 'lots.read')
     ? {
-        day: await countDay(read, startOfDay(dayOf(at, works.timeZone), works.timeZone)),
-        week: await countDay(read, at - WEEK),
+        day: await countDay(read, startOfDay(dayOf(at, works.timeZone), works.timeZone), at),
+        week: await countDay(read, at - WEEK, at),
       }
     : undefined
   return { headline: waitingHeadline(countsOf(items, totals)), bands: bandsOf(items, totals), figures }
@@ -106,14 +106,14 @@ function countsOf(
 const urgencies = ['now', 'shift', 'week'] as const satisfies readonly Urgency[]
 
 /** Kinds that stand for several in one line say so in the line. */
-const together: readonly WaitingKind[] = ['lot-to-decide', 'signal']
+const together: readonly WaitingKind[] = ['lot-to-decide', 'signal', 'lot-held', 'own-lot-held']
 
 const bandsOf = (items: readonly WaitingItem[], totals: readonly WaitingTotal[]): Today['bands'] =>
   urgencies.flatMap((urgency) => {
     const mine = items.filter(({ kind }) => urgencyOf(kind) === urgency)
     const more = totals.filter(({ count, kind }) => {
       const shown = mine.filter((item) => item.kind === kind).length
-      return shown > 0 && count > shown && (!together.includes(kind) || shown > 11)
+      return shown > 0 && count > shown && (!together.includes(kind) || shown >= SHOWN)
     })
     return mine.length === 0 ? [] : [{ urgency, items: mine, more }]
   })

@@ -1,4 +1,5 @@
 import { listBodies, listDecidedInState, listToMeasure } from '@/lib/data/today-lots'
+import { heldItems, stakeOf } from './today-held'
 import {
   type AskedToday,
   agoOf,
@@ -8,14 +9,16 @@ import {
   totalOf,
   type WaitingItem,
 } from './today-item'
-import { lotHref, stakeOf } from './today-lots'
+
+/** Held lots that are looked at to find what they wait for; the rest is counted. */
+const LOOKED_AT = 200
 
 /** What the bench has before it: lots to finish, to begin and to measure anew, and what became of one’s own. */
 export async function benchOfToday({ at, personId, tx }: AskedToday): Promise<FoundToday> {
   const begun = await listToMeasure(tx, true, SHOWN)
   const untouched = await listToMeasure(tx, false, SHOWN)
   const rework = await listDecidedInState(tx, 'rework', SHOWN)
-  const held = await listDecidedInState(tx, 'held', SHOWN, personId)
+  const held = await listDecidedInState(tx, 'held', LOOKED_AT, personId)
   const bodies = await listBodies(
     tx,
     [...begun.lots, ...untouched.lots].map((lot) => lot.specificationRevisionId),
@@ -52,22 +55,8 @@ export async function benchOfToday({ at, personId, tx }: AskedToday): Promise<Fo
       deed: 'Measure',
     }),
   )
-  const own = held.lots.map(
-    (lot): WaitingItem => ({
-      kind: 'own-lot-held',
-      key: `lot ${lot.code}`,
-      since: lot.decidedAt ?? lot.at,
-      mark: 'near',
-      title: `Your lot ${lot.code} is on hold`,
-      text: lot.reason === '' ? 'Quality has a question about it.' : `Held because: ${lot.reason}`,
-      stake: stakeOf(lot),
-      waiting: agoOf(lot.decidedAt ?? lot.at, at),
-      href: lotHref(lot.code),
-      deed: 'Look',
-    }),
-  )
   return {
-    items: [...toMeasure, ...anew, ...own],
+    items: [...toMeasure, ...anew, ...heldItems(held.lots, 'own-lot-held', at)],
     totals: [
       ...totalOf('lot-half-measured', begun.count, '/lots?state=measuring'),
       ...totalOf('lot-to-measure', untouched.count, '/lots?state=measuring'),

@@ -1,19 +1,12 @@
 import { listLimitNeeds } from '@/lib/data/today-desks'
 import { FEWEST_BASELINE_LOTS, PROVISIONAL_BELOW } from '@/lib/domain/control/propose-limits'
-import {
-  type AskedToday,
-  agoOf,
-  counted,
-  type FoundToday,
-  SHOWN,
-  totalOf,
-  type WaitingItem,
-} from './today-item'
+import { shortDate } from './short-date'
+import { type AskedToday, counted, type FoundToday, SHOWN, totalOf, type WaitingItem } from './today-item'
 
 const hrefOf = (code: string): string => `/drift/limits?product=${encodeURIComponent(code)}`
 
 /** Products whose lots are enough for control limits, or for limits that are no longer provisional. */
-export async function limitsOfToday({ at, tx }: AskedToday): Promise<FoundToday> {
+export async function limitsOfToday({ tx, works }: AskedToday): Promise<FoundToday> {
   const { bare, provisional } = await listLimitNeeds(tx)
   const ready = bare.filter((product) => product.lots >= FEWEST_BASELINE_LOTS)
   // One line a product: its oldest provisional set stands for all, and the rows come oldest first.
@@ -35,7 +28,7 @@ export async function limitsOfToday({ at, tx }: AskedToday): Promise<FoundToday>
         title: `The limits of ${set.name} rest on ${set.restsOn} lots`,
         text: `${set.lots} are there now. Limits from more lots raise fewer false alarms.`,
         stake: 'fewer false alarms',
-        waiting: agoOf(set.frozenAt, at),
+        waiting: `frozen ${shortDate(set.frozenAt, works.timeZone)}`,
         href: hrefOf(set.code),
         deed: 'Compare',
       }),

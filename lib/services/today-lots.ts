@@ -1,6 +1,5 @@
 import {
   type DecidedLot,
-  type LotOfToday,
   listBodies,
   listChangedAfterRelease,
   listHeldBefore,
@@ -11,6 +10,7 @@ import type { VerdictKind } from '@/lib/domain/charts/verdict-mark'
 import { type LotStanding, lotStanding } from '@/lib/domain/quality/lot-standing'
 import type { WaitingKind } from '@/lib/domain/quality/what-waits'
 import { shortDate } from './short-date'
+import { heldItems, lotHref, stakeOf } from './today-held'
 import {
   type AskedToday,
   agoOf,
@@ -29,22 +29,16 @@ const LONG_HELD_DAYS = 7
 /** Lots to decide that are looked at one by one; the rest is counted. */
 const LOOKED_AT = 200
 
-export const lotHref = (code: string): string => `/lots/${encodeURIComponent(code)}`
-
-/** What of a lot is at stake: product, and metres where they are known. */
-export const stakeOf = ({ lengthMetres, productName }: LotOfToday): string =>
-  lengthMetres === undefined ? productName : `${Math.round(lengthMetres)} m of ${productName}`
-
 /** What quality has to look at among lots: changed evidence, decisions, holds. Six queries. */
 export async function lotsOfToday(asked: AskedToday): Promise<FoundToday> {
   const { at, tx } = asked
   const changed = await listChangedAfterRelease(tx, SHOWN)
-  const held = await listHeldBefore(tx, at - LONG_HELD_DAYS * DAY, SHOWN)
+  const held = await listHeldBefore(tx, at - LONG_HELD_DAYS * DAY, LOOKED_AT)
   const toDecide = await decisionsOfToday(asked)
   return {
     items: [
       ...changed.lots.map((lot) => changedItem(lot, asked)),
-      ...held.lots.map((lot) => heldItem(lot, asked)),
+      ...heldItems(held.lots, 'lot-held', at),
       ...toDecide.items,
     ],
     totals: [
@@ -66,19 +60,6 @@ const changedItem = (lot: DecidedLot, { works }: AskedToday): WaitingItem => ({
   waiting: lot.decidedAt === undefined ? '' : `released ${shortDate(lot.decidedAt, works.timeZone)}`,
   href: `${lotHref(lot.code)}/release`,
   deed: 'Look again',
-})
-
-const heldItem = (lot: DecidedLot, { at }: AskedToday): WaitingItem => ({
-  kind: 'lot-held',
-  key: `lot ${lot.code}`,
-  since: lot.decidedAt,
-  mark: 'near',
-  title: `${lot.code} has been on hold for more than a week`,
-  text: lot.reason === '' ? 'It takes up a shelf until somebody decides.' : `Held because: ${lot.reason}`,
-  stake: stakeOf(lot),
-  waiting: lot.decidedAt === undefined ? '' : agoOf(lot.decidedAt, at),
-  href: `${lotHref(lot.code)}/release`,
-  deed: 'Decide',
 })
 
 const kindOf = {

@@ -51,7 +51,7 @@ export async function backupOfToday({ at }: AskedToday): Promise<FoundToday> {
         title:
           newest === undefined ? 'There is no back-up yet' : 'The newest back-up is more than a week old',
         text: 'Run npm run backup on the computer that serves this page, and keep a copy on another one.',
-        stake: 'everything since then',
+        stake: newest === undefined ? 'everything stored so far' : 'everything since then',
         waiting: newest === undefined ? '' : agoOf(newest, at),
         href: '/settings',
         deed: 'Settings',

@@ -65,7 +65,7 @@ export async function salesOfToday(asked: AskedToday): Promise<FoundToday> {
       since: undefined,
       mark: 'waiting',
       title: `${product.name} has no datasheet`,
-      text: `${counted(product.lots, 'released lot', 'released lots')} could carry one.`,
+      text: 'Without one a customer gets no tensions of what is really made.',
       stake: counted(product.lots, 'released lot', 'released lots'),
       waiting: '',
       href: newHref(product.code),

@@ -1,41 +1,46 @@
 import type { Today } from '@/lib/services/get-today'
 
-/** The day and the week in four figures. */
+/** The day and the week in figures. */
 export function DayFigures({ day, week }: NonNullable<Today['figures']>) {
-  const share = week.firstDecided === 0 ? undefined : (100 * week.rightFirstTime) / week.firstDecided
   return (
-    <dl className="today-figures">
-      <Figure name="made" today={day.made} week={week.made} />
-      <Figure name="measured" today={day.measured} week={week.measured} />
-      <Figure name="released" today={day.released} week={week.released} />
-      <div>
-        <dt>right first time</dt>
-        <dd>
-          <b>{share === undefined ? '–' : `${Math.round(share)} %`}</b>{' '}
-          {week.firstDecided === 0
-            ? 'nothing decided in seven days'
-            : `${week.rightFirstTime} of ${week.firstDecided} decided in seven days`}
-        </dd>
-      </div>
-    </dl>
+    <section className="section" aria-labelledby="today-figures">
+      <table className="today-figures">
+        <caption id="today-figures">Lots</caption>
+        <thead>
+          <tr>
+            <td />
+            <th scope="col">today</th>
+            <th scope="col">seven days</th>
+          </tr>
+        </thead>
+        <tbody>
+          <Row name="made" day={day.made} week={week.made} />
+          <Row name="measured" day={day.measured} week={week.measured} />
+          <Row name="released" day={day.released} week={week.released} />
+          <Row name="right first time" day={shareOf(day)} week={shareOf(week)} />
+        </tbody>
+      </table>
+      <p className="small">Right first time: released by the first decision.</p>
+    </section>
   )
 }
 
-function Figure({
-  name,
-  today,
-  week,
-}: {
+/** Share of the lots decided for the first time that were released then; a dash when none was. */
+const shareOf = ({ firstDecided, rightFirstTime }: NonNullable<Today['figures']>['day']): string =>
+  firstDecided === 0 ? '–' : `${Math.round((100 * rightFirstTime) / firstDecided)} %`
+
+interface RowProps {
   readonly name: string
-  readonly today: number
-  readonly week: number
-}) {
+  readonly day: number | string
+  readonly week: number | string
+}
+
+function Row({ day, name, week }: RowProps) {
   return (
-    <div>
-      <dt>lots {name}</dt>
-      <dd>
-        <b>{today}</b> today, {week} in seven days
-      </dd>
-    </div>
+    <tr>
+      <th scope="row">{name}</th>
+      <td>{day}</td>
+      <td>{week}</td>
+    </tr>
   )
 }

@@ -86,8 +86,8 @@ const order = [
     kind: 'lot-doubtful',
     urgency: 'shift',
     desks: ['quality'],
-    one: 'lot is not proven to be inside',
-    several: 'lots are not proven to be inside',
+    one: 'lot is not proven inside tolerance',
+    several: 'lots are not proven inside tolerance',
   },
   {
     kind: 'lot-to-decide',

@@ -69,6 +69,7 @@ describeOnEachEngine('today', (engine) => {
     ...works.quality,
     roles: ['bench', 'quality', 'sales', 'administrator'],
   })
+  const itemsAt = async (at: number) => itemsOf(await getToday(works.quality, at))
   beforeAll(async () => {
     works = await setUpSteelWorks()
   })
@@ -106,9 +107,17 @@ describeOnEachEngine('today', (engine) => {
 
     it('gives the bench its lots, half measured ones first though they are newer', async () => {
       const today = await getToday(works.bench, NOW)
-      expect(itemsOf(today).map(({ key }) => key)).toEqual(['lot BEGUN', 'lot UNTOUCHED', 'lot HELD'])
+      expect(itemsOf(today).map(({ key }) => key)).toEqual([
+        'lot BEGUN',
+        'lot UNTOUCHED',
+        'held Ask the drawer about the oil.',
+      ])
       expect(lineOf(today, 'lot BEGUN')).toMatchObject({ href: '/bench/BEGUN', text: /^2 specimens of 5/ })
-      expect(lineOf(today, 'lot HELD')?.text).toContain('Ask the drawer about the oil.')
+      expect(lineOf(today, 'held Ask the drawer about the oil.')).toMatchObject({
+        title: 'Your lot HELD is on hold',
+        text: 'Held because: Ask the drawer about the oil.',
+        href: '/lots/HELD',
+      })
       expect(today.headline).toBe(
         'One lot is half measured, one lot waits to be measured, and one more thing waits.',
       )
@@ -130,7 +139,29 @@ describeOnEachEngine('today', (engine) => {
         href: '/lots?state=to-decide',
         waiting: '58 days',
       })
-      expect(lineOf(today, 'lot HELD')).toMatchObject({ kind: 'lot-held', waiting: '52 days' })
+      expect(lineOf(today, 'held Ask the drawer about the oil.')).toMatchObject({
+        kind: 'lot-held',
+        waiting: '52 days',
+      })
+    })
+
+    it('makes one line of lots that are held for the same reason', async () => {
+      await measureLot(works, 'HELD-2', 8, 2541)
+      await decideLot(
+        works.quality,
+        'HELD-2',
+        { verb: 'hold', reason: 'Ask the drawer about the oil.', lotVersion: 2, answers: [] },
+        day(9),
+      )
+      const held = (await itemsAt(NOW)).filter(({ kind }) => kind === 'lot-held')
+      expect(held).toMatchObject([
+        {
+          title: 'HELD and HELD-2 have been on hold for more than a week',
+          stake: '2 lots of Larch 254',
+          waiting: '52 days',
+          href: '/lots?state=held',
+        },
+      ])
     })
 
     it('does not call a hold of yesterday a long one', async () => {
@@ -147,10 +178,13 @@ describeOnEachEngine('today', (engine) => {
     })
 
     it('counts the day in the time zone of the works', async () => {
-      // Begun at 8 UTC; Oslo's day of that lot began at 23 UTC the evening before.
-      const { figures } = await getToday(works.bench, day(7) + 3_600_000)
-      expect(figures?.day).toMatchObject({ made: 1, measured: 1 })
-      expect(figures?.week).toMatchObject({ firstDecided: 1, rightFirstTime: 0 })
+      // HELD was made on day 7 at 8 UTC; in Oslo that day ends at 23 UTC.
+      const MINUTE = 60_000
+      const midnight = day(7) + 15 * 60 * MINUTE
+      const figuresAt = async (at: number) => (await getToday(works.bench, at)).figures
+      expect((await figuresAt(midnight - MINUTE))?.day).toMatchObject({ made: 1, measured: 1 })
+      expect((await figuresAt(midnight + MINUTE))?.day).toMatchObject({ made: 0, measured: 0 })
+      expect((await figuresAt(day(9)))?.week).toMatchObject({ firstDecided: 2, rightFirstTime: 0, made: 8 })
       expect((await getToday(works.sales, NOW)).figures).toBeUndefined()
     })
   })
@@ -246,7 +280,7 @@ describeOnEachEngine('today', (engine) => {
       expect(signals[0]?.href).toMatch(/^\/drift\?product=L254#signal-\d+$/)
       // Three signals, though two lines.
       expect(today.headline).toBe(
-        'One lot is outside its tolerance, three signals wait for an answer, and nine more things wait.',
+        'One lot is outside its tolerance, three signals wait for an answer, and ten more things wait.',
       )
     })
 
@@ -256,10 +290,10 @@ describeOnEachEngine('today', (engine) => {
         { kind: 'gauge-overdue', key: 'gauge B-03', stake: 'no reading this month' },
         { kind: 'gauge-due', key: 'gauge R-01', waiting: '10 days left', href: '/equipment/gauges/R-01' },
       ])
-      // Of the lots of the thirty days before day 36 one has two specimens (BEGUN) and one has five (HELD).
+      // Of the lots of the thirty days before day 36 one has two specimens (BEGUN) and two have five (HELD, HELD-2).
       expect(lineOf(await getToday(works.quality, day(36)), 'gauge B-03')).toMatchObject({
         kind: 'gauge-due',
-        stake: '7 readings of lots of this month',
+        stake: '12 readings of lots of this month',
       })
     })
 
@@ -358,6 +392,6 @@ describeOnEachEngine('today', (engine) => {
       href: '/lots?state=to-decide',
     })
     // What is not shown is counted all the same; of back-ups nothing is known on PostgreSQL.
-    expect(today.headline).toContain(`and ${engine === 'sqlite' ? 54 : 53} more things wait.`)
+    expect(today.headline).toContain(`and ${engine === 'sqlite' ? 55 : 54} more things wait.`)
   })
 })
