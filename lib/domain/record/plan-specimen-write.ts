@@ -140,7 +140,7 @@ function touch(
         kind: reading.kind,
         body,
         hash: sha256(body),
-        personId: actor.personId,
+        personId: reading.personId ?? actor.personId,
         measuredAt: reading.measuredAt,
         recordedAt: at,
         equipment: reading.equipment,

@@ -71,6 +71,8 @@ export interface SpecimenEntry {
     readonly values: SheetPart
     readonly equipment: EquipmentCodes
     readonly measuredAt: number
+    /** Who measured, where that is not the person who enters it. */
+    readonly personId?: number
     readonly supersedes?: string
     readonly reason?: string
   }

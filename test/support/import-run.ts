@@ -1,0 +1,100 @@
+import { mkdirSync, writeFileSync } from 'node:fs'
+import { join } from 'node:path'
+import type { Actor } from '@/lib/access/actor'
+import { openBulk } from '@/lib/data/bulk/open-bulk'
+import { database } from '@/lib/data/database'
+import { requireEnvironment } from '@/lib/data/env'
+import { sha256 } from '@/lib/data/hash'
+import { changeImport, findImport, type ImportFacts, insertImport, listSetAside } from '@/lib/data/imports'
+import type { Problem } from '@/lib/domain/errors'
+import { canonicalJson } from '@/lib/domain/record/canonical-json'
+import { CsvRecords, delimiterOf } from '@/lib/input/bench-file/csv-records'
+import { cleanHeaders, decimalOf, proposedColumns } from '@/lib/input/bench-file/layout'
+import { type ImportRun, runImport } from '@/lib/services/import/run-import'
+
+export interface ImportedText {
+  readonly facts: ImportFacts
+  readonly ended: string
+}
+
+/** Puts a text into the imports folder and the table, ready to run. */
+export async function draftImport(
+  actor: Actor,
+  text: string,
+  at: number,
+): Promise<{ id: number; path: string }> {
+  const { dataDir } = requireEnvironment()
+  const folder = join(dataDir, 'imports')
+  mkdirSync(folder, { recursive: true })
+  const path = join(folder, `${sha256(text)}.csv`)
+  writeFileSync(path, text)
+  const delimiter = delimiterOf(text)
+  const reader = new CsvRecords(delimiter)
+  const rows = [...reader.push(text.slice(0, 100_000)), ...reader.end()].flatMap((one) =>
+    'cells' in one ? [one.cells] : [],
+  )
+  const headers = cleanHeaders(rows[0] ?? [])
+  const options = {
+    delimiter,
+    decimal: decimalOf(rows.slice(1, 50)) ?? 'point',
+    columns: proposedColumns(headers),
+  }
+  const row = await database().write(async (tx) => {
+    const facts = await insertImport(tx, {
+      fileName: 'bench.csv',
+      sha256: sha256(text),
+      bytes: text.length,
+      format: 'csv',
+      options: canonicalJson(options),
+      at,
+      personId: actor.personId,
+    })
+    await changeImport(tx, { id: facts.id, states: ['draft'] }, { state: 'running' })
+    return facts
+  })
+  return { id: row.id, path }
+}
+
+/** Runs an import in this process, as the worker does. */
+export async function runDraft(
+  actor: Actor,
+  { id, path }: { readonly id: number; readonly path: string },
+  change: Partial<ImportRun> = {},
+): Promise<ImportedText> {
+  const connection = await openBulk(requireEnvironment())
+  try {
+    const ended = await runImport(id, {
+      read: database().read,
+      connection,
+      importer: { personId: actor.personId, mayAddToDecided: actor.roles.includes('quality') },
+      timeZone: 'Europe/Oslo',
+      path,
+      ...change,
+    })
+    const facts = await findImport(database().read, id)
+    if (!facts) throw new Error('the import is gone')
+    return { facts, ended }
+  } finally {
+    await connection.close()
+  }
+}
+
+/** Imports a text from beginning to end. */
+export const importText = async (
+  actor: Actor,
+  text: string,
+  at: number,
+  change: Partial<ImportRun> = {},
+): Promise<ImportedText> => runDraft(actor, await draftImport(actor, text, at), { now: () => at, ...change })
+
+/** Rows set aside: line, kind, column, sentence. */
+export async function setAsideOf(importId: number) {
+  const rows = [
+    ...(await listSetAside(database().read, importId, 'refused', { take: 10_000 })),
+    ...(await listSetAside(database().read, importId, 'differs', { take: 10_000 })),
+  ].sort((a, b) => a.row - b.row)
+  return rows.map((one) => {
+    const problems = JSON.parse(one.problems) as readonly Problem[]
+    return { ...one, problems, first: problems[0]?.message ?? '', where: problems.map(({ where }) => where) }
+  })
+}
