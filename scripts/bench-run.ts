@@ -3,6 +3,7 @@ import { database } from '@/lib/data/database'
 import { buildStaffChart } from '@/lib/domain/charts/build-staff-chart'
 import { drawStaffChart } from '@/lib/domain/charts/draw-staff-chart'
 import { layoutStaffChart } from '@/lib/domain/charts/layout-staff-chart'
+import { staffBrush } from '@/lib/domain/charts/staff-brush'
 import { svgText } from '@/lib/domain/charts/svg'
 import { parseStaves } from '@/lib/input/drift-view'
 import { svgToPng } from '@/lib/output/svg-to-png'
@@ -94,6 +95,24 @@ for (const times of [1, 25]) {
   results.push(await measure(`chart of ${input.lots.length} lots laid out`, 10, chart))
   results.push(await measure(`chart of ${input.lots.length} lots as SVG`, 10, () => svgText(chart())))
 }
+const decades = longer(1250)
+const whole = { from: 0, to: decades.lots.length - 1 }
+results.push(
+  await measure(`chart of ${decades.lots.length} lots built`, 3, () =>
+    buildStaffChart({ ...decades, window: whole }),
+  ),
+  await measure(`chart of ${decades.lots.length} lots laid out and drawn`, 3, () =>
+    drawStaffChart(layoutStaffChart(buildStaffChart({ ...decades, window: whole }), 1200)),
+  ),
+  await measure(`52 lots of ${decades.lots.length} laid out and drawn`, 5, () =>
+    drawStaffChart(
+      layoutStaffChart(buildStaffChart({ ...decades, window: { from: 25_000, to: 25_051 } }), 1200),
+    ),
+  ),
+  await measure(`overview of ${decades.lots.length} lots`, 3, () =>
+    staffBrush(decades, { x: 138, w: 1000, compact: false }, 1200),
+  ),
+)
 const svg = svgText(drawStaffChart(layoutStaffChart(buildStaffChart(drift.chart), 1200)))
 results.push(await measure('chart of 40 lots as PNG', 5, () => svgToPng(svg)))
 await database().close()

@@ -145,6 +145,80 @@ test('the overview moves and resizes the window by mouse and by keys', async ({ 
   await expect(notes).toHaveCount(8)
 })
 
+/** The lots shown, as the overview says them. */
+const shownLots = (page: Page) => page.getByRole('slider', { name: 'Lots shown', exact: true })
+
+test('dragging the plot moves a drawn layer, and the chart is drawn anew where it is let go', async ({
+  page,
+}) => {
+  await drawBoth(page, { lots: 200 }, 964)
+  await expect(shownLots(page)).toHaveAttribute('aria-valuetext', 'LA-449 to LA-500')
+  const plot = await page.locator('.staff-plot').boundingBox()
+  if (!plot) throw new Error('no plot')
+  const [x, y] = [plot.x + 400, plot.y + 150]
+  await page.mouse.move(x, y)
+  await page.mouse.down()
+  await page.mouse.move(x + 20, y)
+  await page.mouse.move(x + 20 + 142, y, { steps: 3 })
+  const layer = page.locator('.staff-layer g g').first()
+  await expect(layer).toHaveAttribute('transform', /^translate\(142 0\)$/)
+  // Ten lots at 14.2 px came in at the left, drawn already.
+  const code = 'LA-442'
+  await expect(page.locator(`.staff-layer ellipse[data-lot="${code}"][data-stave="mass"]`)).toHaveCount(1)
+  await page.mouse.up()
+  await expect(page.locator('.staff-layer')).toHaveCount(0)
+  await expect(shownLots(page)).toHaveAttribute('aria-valuetext', 'LA-439 to LA-490')
+  // A drag is no click: nothing was opened.
+  expect(await page.evaluate(() => window.opened)).toEqual([])
+})
+
+test('the wheel with ctrl zooms about the mouse, sideways it moves; keys and buttons do the same', async ({
+  page,
+}) => {
+  await drawBoth(page, { lots: 200, window: { from: 60, to: 119 } }, 964)
+  const lots = async (): Promise<readonly number[]> =>
+    ((await shownLots(page).getAttribute('aria-valuetext')) ?? '')
+      .split(' to ')
+      .map((code) => Number(code.slice(3)) - 301)
+  const note = page.locator('.staff-plot .recharts-surface ellipse[data-lot="LA-391"][data-stave="mass"]')
+  const before = await note.boundingBox()
+  if (!before) throw new Error('no note')
+  await page.mouse.move(before.x + 5, before.y + 4)
+  await page.keyboard.down('Control')
+  await page.mouse.wheel(0, -120)
+  await page.keyboard.up('Control')
+  await expect.poll(async () => (await lots())[0]).toBeGreaterThan(65)
+  const [from = 0, to = 0] = await lots()
+  expect(to - from).toBeLessThan(45)
+  // The lot under the mouse stays there, within half a step.
+  await expect.poll(async () => Math.abs(((await note.boundingBox())?.x ?? 0) - before.x)).toBeLessThan(15)
+  await page.mouse.wheel(-300, 0)
+  await expect.poll(async () => (await lots())[0]).toBeLessThan(from)
+  const pointer = page.getByRole('slider', { name: 'Lot read on all staves' })
+  await pointer.focus()
+  await page.keyboard.press('0')
+  await expect.poll(lots).toEqual([0, 199])
+  await expect(page.getByRole('button', { name: 'Show all lots' })).toHaveAttribute('aria-disabled', 'true')
+  await page.keyboard.press('+')
+  await expect.poll(async () => ((await lots())[1] ?? 0) - ((await lots())[0] ?? 0)).toBe(133)
+  await page.keyboard.press('-')
+  await expect.poll(lots).toEqual([0, 199])
+  await page.getByRole('button', { name: 'Show the newest lots' }).click()
+  await expect.poll(lots).toEqual([148, 199])
+  for (let press = 0; press < 8; press += 1)
+    await page.getByRole('button', { name: 'Show fewer lots, larger' }).click()
+  await expect.poll(async () => ((await lots())[1] ?? 0) - ((await lots())[0] ?? 0)).toBe(7)
+})
+
+test('a window of 10,000 lots is drawn in bounded marks and can be moved', async ({ page }) => {
+  await drawBoth(page, { lots: 10_000, window: { from: 0, to: 9999 } }, 964)
+  const marks = await page.locator('.staff-plot .recharts-surface [data-mark]').count()
+  expect(marks).toBeLessThan(4 * 5 * 764)
+  await expect(page.getByText(/^\d+ signals not drawn: /).first()).toBeVisible()
+  await page.getByRole('button', { name: 'Show the newest lots' }).click()
+  await expect(shownLots(page)).toHaveAttribute('aria-valuetext', 'LA-10249 to LA-10300')
+})
+
 test.describe('with a finger', () => {
   test.use({ hasTouch: true })
 
@@ -172,6 +246,23 @@ test.describe('with a finger', () => {
     expect(left).toEqual([])
     await note.tap()
     await expect.poll(() => left).toEqual(['/lots/LA-340'])
+  })
+
+  test('two fingers apart show fewer lots, about the place between them', async ({ page }) => {
+    await drawBoth(page, { lots: 200, window: { from: 60, to: 119 } }, 964)
+    const plot = await page.locator('.staff-plot').boundingBox()
+    if (!plot) throw new Error('no plot')
+    const client = await page.context().newCDPSession(page)
+    const touch = (type: 'touchStart' | 'touchMove' | 'touchEnd', xs: readonly number[]) =>
+      client.send('Input.dispatchTouchEvent', {
+        type,
+        touchPoints: xs.map((x, id) => ({ x: plot.x + x, y: plot.y + 150, id })),
+      })
+    await touch('touchStart', [470])
+    await touch('touchStart', [470, 570])
+    for (const more of [10, 30, 50]) await touch('touchMove', [470 - more, 570 + more])
+    await touch('touchEnd', [])
+    await expect(shownLots(page)).toHaveAttribute('aria-valuetext', /^LA-37\d to LA-40\d$/)
   })
 })
 

@@ -48,7 +48,7 @@ export function sampleChart({
       code: `LA-${301 + index}`,
       madeAt,
       label: day(madeAt),
-      monthLabel: `${months[new Date(madeAt).getUTCMonth()]} 2026`,
+      monthLabel: `${months[new Date(madeAt).getUTCMonth()]} ${new Date(madeAt).getUTCFullYear()}`,
     }
   })
   const wear = (index: number): number => (equal || index < 34 ? 0 : Math.min(1.6, 0.062 * (index - 34)))

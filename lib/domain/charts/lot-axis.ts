@@ -20,6 +20,18 @@ export function sharedPrefix(codes: readonly string[]): string {
   return codes.every((code) => code.startsWith(prefix) && code.length > prefix.length) ? prefix : ''
 }
 
+/** A window longer than this has the same day twice: months with their years stand instead. */
+const LONG = 330 * 86_400_000
+
+/** The month of a lot: named at it, or at the last lot before it where the month changed. */
+function monthAt(lots: StaffChart['lots'], index: number): string | undefined {
+  for (let at = index; at >= 0; at -= 1) {
+    const name = lots[at]?.monthLabel
+    if (name !== undefined) return name
+  }
+  return undefined
+}
+
 /** Ticks of the lot axis: as many as stand clear of each other, at round code numbers where codes are numbered. */
 export function lotTicks(
   chart: StaffChart,
@@ -37,10 +49,12 @@ export function lotTicks(
     strides.find((lotsApart) => lotsApart * frame.step >= widest + 16) ?? Math.max(1, lots.length)
   const offset = lots.findIndex(({ code }) => Number(codeOf(code)) % stride === 0)
   const start = from + (offset >= 0 && offset < stride ? offset : 0)
+  const isLong = (chart.lots[to]?.madeAt ?? 0) - (chart.lots[from]?.madeAt ?? 0) > LONG
+  const dayOf = (index: number, day: string): string => (isLong ? (monthAt(chart.lots, index) ?? day) : day)
   const ticks: LotTick[] = []
   for (let index = start; index <= to; index += stride) {
     const lot = chart.lots[index]
-    if (lot) ticks.push({ index, x: frame.xAt(index), code: codeOf(lot.code), day: lot.label })
+    if (lot) ticks.push({ index, x: frame.xAt(index), code: codeOf(lot.code), day: dayOf(index, lot.label) })
   }
   return { prefix, ticks }
 }
