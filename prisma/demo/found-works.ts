@@ -1,5 +1,6 @@
 import type { Actor } from '@/lib/access/actor'
 import { createDemoAdministrator } from '@/lib/services/create-demo-administrator'
+import { createMaterial } from '@/lib/services/create-material'
 import { createPerson } from '@/lib/services/create-person'
 import { createProduct } from '@/lib/services/create-product'
 import { createWorks } from '@/lib/services/create-works'
@@ -9,9 +10,11 @@ import { createGauge } from '@/lib/services/keep-gauge'
 import { createMachine } from '@/lib/services/keep-machine'
 import { createRig } from '@/lib/services/keep-rig'
 import { createWeight } from '@/lib/services/keep-weight'
-import { demoGauges, demoMachine, demoPeople, demoRig, demoWeights, demoWorks } from './equipment'
+import { alderNylon } from './alder'
+import { demoGauges, demoMachines, demoPeople, demoRigs, demoWeights, demoWorks } from './equipment'
 import { demoProducts } from './products'
-import { demoSchedule, dieOf } from './schedule'
+import { demoSchedule } from './schedule'
+import { workingDay } from './working-days'
 
 export type DemoUsername = (typeof demoPeople)[number]['username']
 
@@ -44,30 +47,55 @@ export async function foundDemoWorks(at: number): Promise<DemoActors> {
     const made = await createPerson(founding, inputOf(person), { demo: true, at })
     actors[person.username] = { personId: made.id, name: made.name, roles: [...person.roles] }
   }
-  for (const { code, due, ...gauge } of demoGauges)
-    await createGauge(founding, code, { uRelative: 0, error: 0, note: '', calibrationDue: due, ...gauge }, at)
+  await keepEquipment(founding, at)
+  await keepCatalogue(founding, at)
+  return actors as DemoActors
+}
+
+async function keepEquipment(founding: Actor, at: number): Promise<void> {
+  for (const { code, due, note = '', uRelative = 0, ...gauge } of demoGauges)
+    await createGauge(founding, code, { error: 0, note, uRelative, calibrationDue: due, ...gauge }, at)
   for (const { code, ...weight } of demoWeights)
     await createWeight(founding, code, { ...weight, note: '' }, at)
-  const { code: rigCode, ...rig } = demoRig
-  await createRig(founding, rigCode, { ...rig, weightCodes: [...rig.weightCodes], note: '' }, at)
-  const { code: machineCode, ...machine } = demoMachine
-  await createMachine(founding, machineCode, machine, at)
-  const dies = new Map(demoSchedule().map((lot) => [dieOf(lot.micrometres, lot.index), lot.micrometres]))
+  for (const { code, ...rig } of demoRigs)
+    await createRig(founding, code, { ...rig, weightCodes: [...rig.weightCodes], note: '' }, at)
+  for (const { code, ...machine } of demoMachines) await createMachine(founding, code, machine, at)
+  const dies = new Map(
+    demoSchedule().flatMap(({ dieCode, micrometres }) => (dieCode ? [[dieCode, micrometres] as const] : [])),
+  )
   for (const [code, micrometres] of dies)
     await createDie(founding, code, { name: `Die ${code.slice(2)}`, sizeMetres: micrometres / 1e6 }, at)
-  for (const { code, family, name, specification } of demoProducts) {
-    await createProduct(founding, { code, name, family, construction: 'plain' }, at)
-    await issueSpecification(
-      founding,
-      {
-        productCode: code,
-        materialCode: 'MUSIC-WIRE',
-        effectiveFrom: at,
-        note: '',
-        specification: { body: specification },
-      },
-      at,
-    )
+}
+
+async function keepCatalogue(founding: Actor, at: number): Promise<void> {
+  const { body, code: nylon, name: nylonName } = alderNylon
+  await createMaterial(
+    founding,
+    nylon,
+    {
+      name: nylonName,
+      standing: 'measured here',
+      source: 'Strings of three sizes, each sounded at five loads.',
+      body,
+    },
+    at,
+  )
+  for (const { code, construction, family, materialCode, name, revised, specification } of demoProducts) {
+    await createProduct(founding, { code, name, family, construction }, at)
+    const issue = (effectiveFrom: number, note: string, specificationBody: typeof specification) =>
+      issueSpecification(
+        founding,
+        { productCode: code, materialCode, effectiveFrom, note, specification: { body: specificationBody } },
+        at,
+      )
+    await issue(at, '', specification)
+    if (revised) await issue(revisedFrom(code, revised.from), revised.note, revised.specification)
   }
-  return actors as DemoActors
+}
+
+/** Midnight before the first lot that is made to the later revision. */
+function revisedFrom(productCode: string, index: number): number {
+  const lot = demoSchedule().find((one) => one.productCode === productCode && one.index === index)
+  if (!lot) throw new Error(`The demo has no lot ${index} of ${productCode}.`)
+  return workingDay(lot.day)
 }

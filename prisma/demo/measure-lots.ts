@@ -2,8 +2,8 @@ import type { Actor } from '@/lib/access/actor'
 import { clientIdFrom } from '@/lib/input/client-id'
 import { openLot } from '@/lib/services/open-lot'
 import { recordSpecimens } from '@/lib/services/record-specimens'
-import { demoMachine, demoRig } from './equipment'
-import { demoProducts } from './products'
+import { rigOf } from './equipment'
+import { productOf } from './products'
 import { seededRandom } from './random'
 import { readLot } from './readings'
 import type { DemoSchedule } from './schedule'
@@ -21,10 +21,18 @@ function idsOf(lot: DemoSchedule): () => string {
   }
 }
 
-/** Opens a lot and records the first `specimens` of its five, as its maker would. */
-export async function measureLot(maker: Actor, lot: DemoSchedule, specimens: number): Promise<void> {
-  const product = demoProducts.find(({ code }) => code === lot.productCode)
-  if (!product) throw new Error(`The demo has no product ${lot.productCode}.`)
+/**
+ * Opens a lot and records the first `specimens` of its five, as its maker would. What it is made of is named
+ * when coils, spools and batches have been received (`receiveMaterials`).
+ */
+export async function measureLot(
+  maker: Actor,
+  lot: DemoSchedule,
+  specimens: number,
+  received = false,
+): Promise<void> {
+  const product = productOf(lot.productCode)
+  const rig = rigOf(lot.rig)
   const nextId = idsOf(lot)
   await openLot(
     maker,
@@ -33,12 +41,13 @@ export async function measureLot(maker: Actor, lot: DemoSchedule, specimens: num
       code: lot.code,
       productCode: lot.productCode,
       madeAt: lot.madeAt,
-      machineCode: demoMachine.code,
+      machineCode: lot.machine,
       dieCode: lot.dieCode,
       lengthMetres: lot.lengthMetres,
       setting: '',
+      materials: received ? [...lot.materials] : [],
     },
-    lot.madeAt + MINUTE,
+    lot.openedAt + MINUTE,
   )
   if (specimens === 0) return
   await recordSpecimens(
@@ -60,16 +69,16 @@ export async function measureLot(maker: Actor, lot: DemoSchedule, specimens: num
               keptDoubts: [...sheet.keptDoubts],
               load: {
                 kind: 'weights' as const,
-                hanger: demoRig.hangerCode,
-                weights: [...demoRig.weightCodes],
+                hanger: product.load[0] ?? '',
+                weights: product.load.slice(1),
               },
             },
             equipment: {
-              rig: demoRig.code,
-              micrometer: demoRig.micrometerCode,
-              balance: demoRig.balanceCode,
-              rule: demoRig.ruleCode,
-              counter: demoRig.counterCode,
+              rig: rig.code,
+              micrometer: lot.micrometer,
+              balance: rig.balanceCode,
+              rule: rig.ruleCode,
+              counter: rig.counterCode,
             },
             measuredAt: lot.measuredAt + index * MINUTE,
           },

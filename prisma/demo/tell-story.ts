@@ -1,31 +1,20 @@
 import type { Actor } from '@/lib/access/actor'
-import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
+import type { DispositionVerb, Stop } from '@/lib/domain/quality/propose-disposition'
 import { answerSignal } from '@/lib/services/answer-signal'
 import { decideLot } from '@/lib/services/decide-lot'
 import { freezeLimits } from '@/lib/services/freeze-limits'
-import { getDrift } from '@/lib/services/get-drift'
-import { getLot } from '@/lib/services/get-lot'
-import type { SignalView } from '@/lib/services/signal-views'
-import { type DemoSchedule, inZeroWeek, WORN_DIE } from './schedule'
+import { getLot, type LotView } from '@/lib/services/get-lot'
+import { listSignals } from '@/lib/services/list-signals'
+import { defaultCharts } from './default-charts'
+import { CONCESSION } from './papers'
+import { productOf } from './products'
+import type { DemoSchedule } from './schedule'
+import { answerOf, hasSwappedDigits, lacksSlot, noCause } from './story-answers'
 
 const HOUR = 3_600_000
 
-/** After so many lots of a product quality freezes its first control limits. */
-const baselineLots = (micrometres: number): number => (micrometres === 254 ? 60 : 25)
-
-const charts: readonly {
-  readonly characteristic: CharacteristicId
-  readonly statistic: 'mean' | 'within-lot-sd'
-}[] = [
-  { characteristic: 'diameter', statistic: 'mean' },
-  { characteristic: 'massPerMetreWeighed', statistic: 'mean' },
-  { characteristic: 'closure', statistic: 'mean' },
-  { characteristic: 'massPerMetreWeighed', statistic: 'within-lot-sd' },
-  { characteristic: 'effectiveDensity', statistic: 'mean' },
-]
-
 async function freezeFirstLimits(quality: Actor, lot: DemoSchedule, at: number): Promise<void> {
-  for (const chart of charts)
+  for (const chart of defaultCharts)
     await freezeLimits(
       quality,
       {
@@ -37,36 +26,55 @@ async function freezeFirstLimits(quality: Actor, lot: DemoSchedule, at: number):
       },
       at,
     )
-  // Signals among the baseline's own lots are looked into before the first lot is judged by the limits.
-  const { signals } = await getDrift(quality, lot.productCode, charts)
-  for (const signal of signals.filter((one) => one.state === 'open'))
+  // Signals among the baseline's own lots, and on the machine's chart that they now stand on, are looked into
+  // before the first lot is judged by the limits.
+  const signals = (await listSignals(quality)).filter(
+    ({ machine, productCode }) => productCode === lot.productCode || machine?.code === lot.machine,
+  )
+  for (const signal of signals)
     await answerSignal(quality, signal.id, { ...noCause, version: signal.version }, at)
 }
 
-const noCause = {
-  cause: 'none found',
-  answer: 'Looked at with the lots around it: no cause found, kept under watch.',
-} as const
+interface Decision {
+  readonly verb: DispositionVerb
+  readonly reason: string
+  readonly answers: readonly { readonly stopId: string; readonly answer: string }[]
+}
 
-/** What quality found behind a signal, as it would be written down that day. */
-function answerOf(
-  signal: SignalView,
-  lot: DemoSchedule,
-): { readonly cause: string; readonly answer: string } {
-  if (signal.characteristic === 'diameter' && inZeroWeek(lot.day))
-    return { cause: 'micrometer zero', answer: 'M-14 read high on a pin; its zero was set again.' }
-  if (signal.characteristic === 'effectiveDensity')
+/** An answer to each stop that is not a signal, which is answered where it stands. */
+const answersTo = (stops: readonly Stop[], answer: string): Decision['answers'] =>
+  stops.filter(({ id }) => !id.startsWith('signal-')).map(({ id }) => ({ stopId: id, answer }))
+
+function decisionOn(lot: DemoSchedule, { assessment }: LotView): Decision {
+  const { judgements, proposal } = assessment
+  const outside = judgements.some((one) => one.verdict === 'outside' && one.id !== 'massPerMetreSounded')
+  const inside = judgements.every((one) => one.verdict === 'inside' || one.id === 'massPerMetreSounded')
+  if (lot.code === CONCESSION.lot)
     return {
-      cause: 'micrometer zero',
-      answer: 'Mass per metre holds while density moves: the zero of M-14 was checked.',
+      verb: 'concession',
+      reason: CONCESSION.reason,
+      answers: answersTo(proposal.stops, CONCESSION.answer),
     }
-  if (lot.dieCode === WORN_DIE.code && signal.side === 'above')
+  if (proposal.verb === 'release')
+    return { verb: 'release', reason: 'Inside tolerance, routes closed.', answers: [] }
+  if (inside && (lacksSlot(lot) || hasSwappedDigits(lot)))
     return {
-      cause: `die ${WORN_DIE.code.slice(2)} wearing`,
-      answer:
-        'Diameter and mass climb together, density holds. Drawn on under watch; the next die is ordered.',
+      verb: 'release',
+      reason: 'Inside tolerance by balance and rule; the fault of the sounding is named.',
+      answers: answersTo(
+        proposal.stops,
+        'The sounding went wrong, not the string: the weighed route stands.',
+      ),
     }
-  return noCause
+  if (outside)
+    return { verb: 'scrap', reason: 'Outside tolerance by mass per metre or size: cut up.', answers: [] }
+  if (inside && proposal.stops.every(({ id }) => id.startsWith('outside-')))
+    return {
+      verb: 'release',
+      reason: 'Mean and spread are inside; the specimen outside was looked at.',
+      answers: answersTo(proposal.stops, 'One end only: a metre more was cut off there.'),
+    }
+  return { verb: 'hold', reason: 'Not proven to be inside tolerance: waits for more specimens.', answers: [] }
 }
 
 /**
@@ -75,30 +83,22 @@ function answerOf(
  */
 export async function decideAsQualityWould(quality: Actor, lot: DemoSchedule): Promise<void> {
   const at = lot.measuredAt + 3 * HOUR
-  if (lot.index + 1 === baselineLots(lot.micrometres)) await freezeFirstLimits(quality, lot, at - HOUR)
-  const seen = await getLot(quality, lot.code)
-  for (const signal of seen.signals.filter((one) => one.state === 'open'))
+  if (lot.index + 1 === productOf(lot.productCode).baseline) await freezeFirstLimits(quality, lot, at - HOUR)
+  let seen = await getLot(quality, lot.code)
+  const open = seen.signals.filter((one) => one.state === 'open')
+  for (const signal of open)
     await answerSignal(
       quality,
       signal.id,
       { ...answerOf(signal, lot), version: signal.version },
       at - HOUR / 2,
     )
-  const { assessment, lot: facts } = await getLot(quality, lot.code)
-  const { proposal } = assessment
-  const outside = assessment.judgements.some(
-    (one) => one.verdict === 'outside' && one.id !== 'massPerMetreSounded',
-  )
-  const verb = proposal.verb === 'release' ? 'release' : outside ? 'scrap' : 'hold'
-  const reasons = {
-    release: 'Inside tolerance, routes closed.',
-    scrap: 'Outside tolerance by mass per metre: cut up.',
-    hold: 'Not proven to be inside tolerance: waits for more specimens.',
-  } as const
+  if (open.length > 0) seen = await getLot(quality, lot.code)
+  const { answers, reason, verb } = decisionOn(lot, seen)
   await decideLot(
     quality,
     lot.code,
-    { verb, reason: reasons[verb], lotVersion: facts.version, answers: [] },
+    { verb, reason, lotVersion: seen.lot.version, answers: [...answers] },
     at,
   )
 }

@@ -25,6 +25,8 @@ export function soundedFundamental(setUp: SoundingSetUp, unloaded: KilogramsPerM
     const next = step(airMassPerMetre(setUp.outerDiameter, frequency, setUp.air))
     // Two neighbouring numbers may go on changing places for ever.
     if (Math.abs(next - frequency) <= 2.3e-16 * next) return next
+    // Where the last bits of the steps differ by more than one, they go round among a few neighbours for ever.
+    if (round > 20 && Math.abs(next - frequency) <= 1e-14 * next) return next
     frequency = next
   }
   throw new RangeError(`the fundamental of ${unloaded} kg/m does not settle`)
