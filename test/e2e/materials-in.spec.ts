@@ -17,7 +17,7 @@ test('quality adds a coil and a spool wound from it, the bench opens a lot of it
   await page.getByLabel('Size').fill('254')
   await page.getByRole('button', { name: 'Add it' }).click()
   // 254 mm is no wire: what was typed is still there.
-  await expect(page.getByRole('alert')).toContainText('Size')
+  await expect(page.getByRole('main').getByRole('alert')).toContainText('Size')
   await expect(page.getByLabel('Heat')).toHaveValue('H 5120')
   await page.getByLabel('Size').fill('254 µm')
   await page.getByRole('button', { name: 'Add it' }).click()
@@ -50,7 +50,9 @@ test('quality adds a coil and a spool wound from it, the bench opens a lot of it
   await rows.nth(1).getByLabel('From').fill('1300')
   await page.getByRole('textbox', { name: 'Why' }).fill('Spliced when the spool ran out.')
   await page.getByRole('button', { name: 'Keep what LA-900 is made of' }).click()
-  await expect(page.getByRole('alert')).toContainText('C-77 goes to 1300 m, but the lot is 1200 m long.')
+  await expect(page.getByRole('main').getByRole('alert')).toContainText(
+    'C-77 goes to 1300 m, but the lot is 1200 m long.',
+  )
   await rows.nth(1).getByLabel('From').fill('800')
   await page.getByRole('button', { name: 'Keep what LA-900 is made of' }).click()
   await expect(page.getByText('C-77').first()).toBeVisible()
@@ -90,8 +92,9 @@ test('programs list and register what came in; the bench may not, and sales may 
       data,
     })
     const list = await page.request.get('/api/v1/materials-in?search=C-88')
+    const answer = { posted: reply.status(), listed: list.status(), list: await list.json() }
     await page.context().close()
-    return { posted: reply.status(), listed: list.status(), list: await list.json() }
+    return answer
   }
   const coil = { code: 'C-88', kind: 'coil', name: 'Bronze 120', lengthMetres: 9000 }
   expect(await send('aldous', coil)).toMatchObject({ posted: 403, listed: 200, list: { count: 0 } })
