@@ -76,7 +76,13 @@ export default roomPage(async (actor, { query }) => {
               </a>
             </div>
           </div>
-          <LotTable asked={asked} columns={columns} lots={list.lots} style={works} />
+          <LotTable
+            asked={asked}
+            columns={columns}
+            lots={list.lots}
+            style={works}
+            brief={shown.join() === usualColumns.join()}
+          />
           <LotPages asked={asked} list={list} />
         </>
       )}

@@ -44,7 +44,7 @@ const blank = <Schema extends z.ZodType>(schema: Schema) =>
 
 const dayOf = (name: string) =>
   z.iso
-    .date({ error: `${name} is not a day of the calendar, such as 2026-11-27.`, abort: true })
+    .date({ error: `${name}: that is no day of the calendar, such as 2026-11-27.`, abort: true })
     .refine((day) => day >= '1900-01-01' && day < '2200-01-01', {
       error: `${name} lies outside the years 1900 to 2200.`,
     })

@@ -1,8 +1,14 @@
 import Link from 'next/link'
 import type { ReactNode } from 'react'
-import type { LotColumn, LotListItem, LotSortKey } from '@/lib/domain/record/lot-columns'
+import {
+  type LotColumn,
+  type LotColumnId,
+  type LotListItem,
+  type LotSortKey,
+  lotCell,
+} from '@/lib/domain/record/lot-columns'
 import { type ListLotsInput, type LotSort, usualSort } from '@/lib/input/lot-list'
-import { type CellStyle, lotCellView } from './lot-cells'
+import { type CellStyle, isOpen, lotCellView } from './lot-cells'
 import { lotsHref } from './lots-href'
 
 interface Props {
@@ -10,6 +16,19 @@ interface Props {
   readonly columns: readonly LotColumn[]
   readonly lots: readonly LotListItem[]
   readonly style: CellStyle
+  /** On a phone only what tells lots apart: nobody chose the columns. */
+  readonly brief: boolean
+}
+
+/** In every lot’s own page, too. */
+const wideOnly = new Set<LotColumnId>(['machine', 'die', 'length', 'specimens'])
+
+function classOf(column: LotColumn, lot: LotListItem, brief: boolean): string | undefined {
+  const classes = [
+    column.decimals === undefined ? '' : 'number',
+    (brief && wideOnly.has(column.id)) || isOpen(lotCell(column, lot)) ? 'wide-only' : '',
+  ]
+  return classes.filter(Boolean).join(' ') || undefined
 }
 
 /** What the next press of a head sorts by: newest, longest and furthest first, then the other way round. */
@@ -20,7 +39,7 @@ function turned(sort: LotSort, key: LotSortKey): LotSort {
 }
 
 /** The lots of a page in the chosen columns; heads that can be sorted by are links. On a phone each lot is a block. */
-export function LotTable({ asked, columns, lots, style }: Props) {
+export function LotTable({ asked, columns, lots, style, brief }: Props) {
   const sort = asked.sort ?? usualSort
   const head = (name: ReactNode, key: LotSortKey | undefined) => {
     if (!key) return name
@@ -72,13 +91,7 @@ export function LotTable({ asked, columns, lots, style }: Props) {
               {columns.map((column) => (
                 <td
                   key={column.id}
-                  className={
-                    column.decimals !== undefined
-                      ? 'number'
-                      : column.id === 'made' || column.id === 'measured'
-                        ? 'lots-instant'
-                        : undefined
-                  }
+                  className={classOf(column, lot, brief)}
                   data-head={column.unit ? `${column.name}, ${column.unit}` : column.name}
                 >
                   {lotCellView(column, lot, style)}

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import { VerdictMark } from '@/app/_ui/charts/VerdictMark'
 import { formatDateTime } from '@/app/_ui/format/dates'
-import { type LotColumn, type LotListItem, lotCell } from '@/lib/domain/record/lot-columns'
+import { type LotCell, type LotColumn, type LotListItem, lotCell } from '@/lib/domain/record/lot-columns'
 import { formatNumber, UNDEFINED_TEXT } from '@/lib/domain/units/format'
 import { stateWords } from '../state-words'
 
@@ -9,6 +9,10 @@ export interface CellStyle {
   readonly timeZone: string
   readonly numberFormat: 'point' | 'comma'
 }
+
+/** Nothing is known yet: a dash in a table, left out on a phone. */
+export const isOpen = (cell: LotCell): boolean =>
+  cell.kind === 'text' ? cell.text === '' : (cell.kind === 'number' ? cell.value : cell.at) === undefined
 
 /** A cell as a person reads it. */
 export function lotCellView(column: LotColumn, lot: LotListItem, style: CellStyle): ReactNode {
