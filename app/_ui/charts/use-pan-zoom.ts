@@ -84,9 +84,12 @@ export function usePanZoom(facts: Facts): PanZoom {
     clearTimeout(rest.current)
     const { current } = drag
     if (!current?.layer) return
-    const next = panWindow(now.current.layout, current.dx)
-    const { window, onWindow } = now.current
+    const { window, onWindow, layout } = now.current
+    const next = panWindow(layout, current.dx)
     current.layer = undefined
+    // What the redrawn chart has moved is behind the hand; the rest of a lot's width is still to come.
+    current.x0 += (layout.chart.window.from - next.from) * layout.frame.step
+    current.dx = 0
     setLayer(undefined)
     if (next.from !== window.from || next.to !== window.to) onWindow(next)
   }
@@ -95,7 +98,6 @@ export function usePanZoom(facts: Facts): PanZoom {
     if (!held.layer) {
       if (!settled) return
       held.layer = wideLayout(input, layout)
-      held.x0 = clientX - held.dx
       setLayer({ layout, wide: held.layer })
     }
     const { older, newer } = panReach(layout)
@@ -105,14 +107,8 @@ export function usePanZoom(facts: Facts): PanZoom {
     const [before, after] = [layout.frame.x - frame.x, frame.x + frame.w - layout.frame.x - layout.frame.w]
     clearTimeout(rest.current)
     const isOut = held.dx > Math.max(0, before) || -held.dx > Math.max(0, after)
-    if (isOut && Math.abs(held.dx) >= frame.step) {
-      settle()
-      held.dx = 0
-    } else
-      rest.current = setTimeout(() => {
-        settle()
-        held.dx = 0
-      }, REST)
+    if (isOut && Math.abs(held.dx) >= frame.step) settle()
+    else rest.current = setTimeout(settle, REST)
   }
 
   useEffect(() => () => clearTimeout(rest.current), [])
