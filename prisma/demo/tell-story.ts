@@ -1,10 +1,12 @@
 import type { Actor } from '@/lib/access/actor'
+import { database } from '@/lib/data/database'
+import { findLotByCode } from '@/lib/data/lots'
 import type { DispositionVerb, Stop } from '@/lib/domain/quality/propose-disposition'
 import { answerSignal } from '@/lib/services/answer-signal'
 import { decideLot } from '@/lib/services/decide-lot'
 import { freezeLimits } from '@/lib/services/freeze-limits'
-import { getLot, type LotView } from '@/lib/services/get-lot'
 import { listSignals } from '@/lib/services/list-signals'
+import { type LoadedLot, loadLot } from '@/lib/services/lot-assessment'
 import { defaultCharts } from './default-charts'
 import { CONCESSION } from './papers'
 import { productOf } from './products'
@@ -45,7 +47,7 @@ interface Decision {
 const answersTo = (stops: readonly Stop[], answer: string): Decision['answers'] =>
   stops.filter(({ id }) => !id.startsWith('signal-')).map(({ id }) => ({ stopId: id, answer }))
 
-function decisionOn(lot: DemoSchedule, { assessment }: LotView): Decision {
+function decisionOn(lot: DemoSchedule, { assessment }: Pick<LoadedLot, 'assessment'>): Decision {
   const { judgements, proposal } = assessment
   const outside = judgements.some((one) => one.verdict === 'outside' && one.id !== 'massPerMetreSounded')
   const inside = judgements.every((one) => one.verdict === 'inside' || one.id === 'massPerMetreSounded')
@@ -77,6 +79,17 @@ function decisionOn(lot: DemoSchedule, { assessment }: LotView): Decision {
   return { verb: 'hold', reason: 'Not proven to be inside tolerance: waits for more specimens.', answers: [] }
 }
 
+/** What a lot is judged by, as on its page but without computing its results again, which would take longest. */
+async function look(
+  code: string,
+): Promise<Pick<LoadedLot, 'assessment' | 'signals'> & { readonly version: number }> {
+  const { read } = database()
+  const row = await findLotByCode(read, code)
+  if (!row) throw new Error(`The demo has no lot ${code}.`)
+  const { assessment, signals } = await loadLot(read, row)
+  return { assessment, signals, version: row.version }
+}
+
 /**
  * What quality does a few hours after a lot is measured: answers the signals that it belongs to, releases what
  * is proposed for release, scraps what is outside, holds the rest; freezes first limits when there are enough lots.
@@ -84,7 +97,7 @@ function decisionOn(lot: DemoSchedule, { assessment }: LotView): Decision {
 export async function decideAsQualityWould(quality: Actor, lot: DemoSchedule): Promise<void> {
   const at = lot.measuredAt + 3 * HOUR
   if (lot.index + 1 === productOf(lot.productCode).baseline) await freezeFirstLimits(quality, lot, at - HOUR)
-  let seen = await getLot(quality, lot.code)
+  let seen = await look(lot.code)
   const open = seen.signals.filter((one) => one.state === 'open')
   for (const signal of open)
     await answerSignal(
@@ -93,12 +106,7 @@ export async function decideAsQualityWould(quality: Actor, lot: DemoSchedule): P
       { ...answerOf(signal, lot), version: signal.version },
       at - HOUR / 2,
     )
-  if (open.length > 0) seen = await getLot(quality, lot.code)
+  if (open.length > 0) seen = await look(lot.code)
   const { answers, reason, verb } = decisionOn(lot, seen)
-  await decideLot(
-    quality,
-    lot.code,
-    { verb, reason, lotVersion: seen.lot.version, answers: [...answers] },
-    at,
-  )
+  await decideLot(quality, lot.code, { verb, reason, lotVersion: seen.version, answers: [...answers] }, at)
 }
