@@ -81,6 +81,46 @@ export const changing = <Schema extends z.ZodType>(
     }
   }
 
+interface Received {
+  /** What stands behind the question mark, the first of each name. */
+  readonly query: Params
+  /** The body, piece by piece: whoever takes it sets its bounds. */
+  readonly body: AsyncIterable<Uint8Array>
+}
+
+/** A route that takes a file as the body of the request, from our own pages, signed in by the cookie. */
+export const receiving = (serve: (actor: Actor | undefined, received: Received) => Promise<unknown>) =>
+  async function route(request: Request): Promise<Response> {
+    try {
+      if (!isFromOurPages(request.headers))
+        throw problem('not-permitted', 'This request does not come from a page of this server.', {
+          mend: 'Open Ledgerline at its own address and try again.',
+        })
+      const actor = await actorFromHeaders(request.headers)
+      if (actor === undefined)
+        throw problem('not-signed-in', 'You are not signed in.', { mend: 'Sign in and try again.' })
+      const query = Object.fromEntries([...new URL(request.url).searchParams].reverse())
+      return replyJson(await serve(actor, { query, body: piecesOf(request.body) }), 201)
+    } catch (error) {
+      return replyError(error)
+    }
+  }
+
+async function* piecesOf(body: ReadableStream<Uint8Array> | null): AsyncGenerator<Uint8Array> {
+  const reader = body?.getReader()
+  if (!reader) return
+  try {
+    for (;;) {
+      const { done, value } = await reader.read()
+      if (done) return
+      yield value
+    }
+  } finally {
+    // Whoever stops reading, because it is too much, ends the request.
+    await reader.cancel().catch(() => undefined)
+  }
+}
+
 /** A route that only reads. `query` is what stands behind the question mark, the first of each name. */
 export const reading = (
   serve: (actor: Actor | undefined, query: Params, params: Params) => Promise<unknown>,

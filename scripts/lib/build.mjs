@@ -4,6 +4,7 @@ import { join } from 'node:path'
 import { runNode } from './child.mjs'
 import { fingerprint } from './fingerprint.mjs'
 import { withLockFile } from './lock-file.mjs'
+import { buildWorkers } from './workers.mjs'
 
 /** Everything the build reads. Generated clients follow from prisma/schema and the lock. */
 const sources = [
@@ -26,7 +27,10 @@ export const buildApp = async (root) => {
   const folder = join(root, '.next')
   const stamp = join(folder, 'ledgerline-sources')
   const hash = fingerprint(root, sources, { skip: generated, salt: process.version })
-  const fresh = () => existsSync(stamp) && readFileSync(stamp, 'utf8') === hash
+  const fresh = () =>
+    existsSync(stamp) &&
+    readFileSync(stamp, 'utf8') === hash &&
+    existsSync(join(root, 'build/workers/import.mjs'))
   if (fresh()) return 'there'
   mkdirSync(join(root, 'build'), { recursive: true })
   return withLockFile(
@@ -43,6 +47,7 @@ export const buildApp = async (root) => {
           env: { NODE_ENV: 'production' },
         },
       )
+      await buildWorkers(root)
       writeFileSync(stamp, hash)
       return 'built'
     },

@@ -4,6 +4,7 @@ import { createServer as createPlain } from 'node:http'
 import { createServer as createTls } from 'node:https'
 import { CommandFailed } from './child.mjs'
 import { settleAddress } from './client-address.mjs'
+import { startImportWorker } from './import-worker.mjs'
 import { listenSentence } from './prepare.mjs'
 
 /** How long requests under way may take to end once the server is told to stop. */
@@ -61,11 +62,11 @@ export const serve = async (root, settings, { dev = false } = {}) => {
   await app.prepare()
   open(app.getRequestHandler())
 
-  stopOnSignal(server, app)
+  stopOnSignal(server, app, startImportWorker(root))
   return shownAddress(settings, port)
 }
 
-const stopOnSignal = (server, app) => {
+const stopOnSignal = (server, app, imports) => {
   let stopping = false
   const stop = (signal) => {
     if (stopping) process.exit(signal === 'SIGINT' ? 130 : 143)
@@ -73,6 +74,7 @@ const stopOnSignal = (server, app) => {
     const deadline = setTimeout(() => server.closeAllConnections(), grace_ms)
     server.close(async () => {
       clearTimeout(deadline)
+      await imports.stop()
       await globalThis[Symbol.for('ledgerline.close')]?.()
       await app.close()
       process.exit(0)

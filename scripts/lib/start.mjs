@@ -7,6 +7,7 @@ import { CommandFailed, fail } from './child.mjs'
 import { announceFirstAccount } from './first-account.mjs'
 import { loadDemo, migrate, prepareDataFolder, readSettings, requireFreePort } from './prepare.mjs'
 import { serve } from './serve.mjs'
+import { buildWorkers } from './workers.mjs'
 
 const root = dirname(dirname(dirname(fileURLToPath(import.meta.url))))
 
@@ -33,7 +34,7 @@ export const start = async (args, { dev = false } = {}) => {
     prepareDataFolder(settings.dataDir)
     await migrate(root, settings)
     if (demo) await loadDemo(root, settings)
-    if (!dev) await buildApp(root)
+    await (dev ? buildWorkers(root) : buildApp(root))
     const address = await serve(root, settings, { dev })
     await announceFirstAccount(root, settings, address)
     const place =

@@ -32,3 +32,9 @@ export async function* readFileRows(
     yield { ...record, row }
   }
 }
+
+/** The headers of a file; none for a file without a line. */
+export async function headersOf(path: string, delimiter: string): Promise<readonly string[]> {
+  for await (const record of readFileRows(path, delimiter)) return 'headers' in record ? record.headers : []
+  return []
+}

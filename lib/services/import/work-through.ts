@@ -1,0 +1,127 @@
+import { join } from 'node:path'
+import type { Role } from '@/lib/access/actor'
+import { may } from '@/lib/access/permit'
+import type { BulkConnection } from '@/lib/data/bulk/bulk-connection'
+import { appendBulkLedger, bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
+import type { Tx } from '@/lib/data/database'
+import { type ImportFacts, nextImport } from '@/lib/data/imports'
+import { getPerson } from '@/lib/data/people'
+import { getWorks } from '@/lib/data/works'
+import { LedgerlineError } from '@/lib/domain/errors'
+import type { ImportOptions } from '@/lib/input/bench-file/layout'
+import { readFileRows } from './file-rows'
+import { runImport } from './run-import'
+
+/** What the thread tells the server: how far, how fast. Nothing of it is stored. */
+export interface ImportProgress {
+  readonly importId: number
+  readonly rowsDone: number
+  /** Over the last seconds of this run. */
+  readonly rowsPerSecond: number
+}
+
+export interface Workplace {
+  readonly connection: BulkConnection
+  readonly read: Tx
+  readonly dataDir: string
+  readonly stopAsked: () => boolean
+  readonly progress: (progress: ImportProgress) => void
+}
+
+/** Where the text of a file lies, named by the hash of what was sent. */
+export const importPath = (dataDir: string, sha256: string): string =>
+  join(dataDir, 'imports', `${sha256}.csv`)
+
+/**
+ * Works through the next import that waits, or goes on with one that was interrupted.
+ * @returns whether there was one
+ */
+export async function workThrough(place: Workplace): Promise<boolean> {
+  const next = await nextImport(place.read)
+  if (!next) return false
+  try {
+    await begin(next, place)
+    await run(next, place)
+  } catch (error) {
+    if (!(error instanceof LedgerlineError)) console.error(error)
+    await fail(next, sentenceOf(error), place)
+  }
+  return true
+}
+
+async function run(next: ImportFacts, { connection, dataDir, progress, read, stopAsked }: Workplace) {
+  const person = await getPerson(read, next.createdById)
+  const works = await getWorks(read)
+  if (!person || !works) throw new Error(`import ${next.id} has no person or no works`)
+  const actor = { personId: person.id, name: person.name, roles: person.roles as readonly Role[] }
+  let seen = { at: Date.now(), rows: next.rowsDone }
+  let rowsPerSecond = 0
+  await runImport(next.id, {
+    read,
+    connection,
+    importer: { personId: person.id, mayAddToDecided: may(actor, 'readings.supersede-any') },
+    timeZone: works.timeZone,
+    path: importPath(dataDir, next.sha256),
+    stopAsked,
+    progress: (rowsDone) => {
+      const elapsed = Date.now() - seen.at
+      if (elapsed > 500) {
+        const now = ((rowsDone - seen.rows) / elapsed) * 1000
+        rowsPerSecond = rowsPerSecond === 0 ? now : 0.7 * rowsPerSecond + 0.3 * now
+        seen = { at: Date.now(), rows: rowsDone }
+      }
+      progress({ importId: next.id, rowsDone, rowsPerSecond })
+    },
+  })
+}
+
+/** Counts the rows of the file, once, and marks the import as under way. */
+async function begin(next: ImportFacts, { connection, dataDir }: Workplace): Promise<void> {
+  const { delimiter } = JSON.parse(next.options) as ImportOptions
+  let rowCount = next.rowCount
+  if (rowCount === undefined) {
+    rowCount = 0
+    for await (const record of readFileRows(importPath(dataDir, next.sha256), delimiter))
+      if ('row' in record) rowCount = record.row
+  }
+  await connection.begin()
+  await connection.run(
+    'UPDATE "Import" SET "state" = ?, "rowCount" = ?, "startedAt" = ? WHERE "id" = ? AND "state" IN (\'queued\', \'running\')',
+    'running',
+    rowCount,
+    connection.instant(next.startedAt ?? Date.now()),
+    next.id,
+  )
+  await connection.commit()
+}
+
+/** What a person reads when a run can't go on. */
+function sentenceOf(error: unknown): string {
+  if (error instanceof LedgerlineError) return `${error.problem.message} ${error.problem.mend ?? ''}`.trim()
+  const code = (error as { readonly code?: unknown } | null)?.code
+  if (code === 'ENOENT') return 'The file is no longer in the data folder. Send it again.'
+  if (code === 'SQLITE_FULL' || code === 'ENOSPC') return 'The disk is full. What is imported so far is kept.'
+  return 'Something unforeseen happened; the server’s log says more. What is imported so far is kept.'
+}
+
+async function fail(next: ImportFacts, message: string, { connection }: Workplace): Promise<void> {
+  await connection.rollback()
+  await connection.begin()
+  const head = await bulkLedgerHead(connection, true)
+  const at = Date.now()
+  await connection.run(
+    'UPDATE "Import" SET "state" = ?, "message" = ?, "endedAt" = ?, "version" = "version" + 1 WHERE "id" = ?',
+    'failed',
+    message,
+    connection.instant(at),
+    next.id,
+  )
+  await appendBulkLedger(connection, head, {
+    at,
+    personId: next.createdById,
+    verb: 'import-failed',
+    subject: `import ${next.id}`,
+    body: { message },
+  })
+  await connection.commit()
+}

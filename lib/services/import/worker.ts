@@ -1,0 +1,54 @@
+/**
+ * The thread that works through imports: its own connections, its own memory, so that pages answer meanwhile. Bundled
+ * to build/workers/import.mjs. With a task in its `workerData` it does that and ends: a spreadsheet is turned into text.
+ */
+import { parentPort, workerData } from 'node:worker_threads'
+import { openBulk } from '@/lib/data/bulk/open-bulk'
+import { database } from '@/lib/data/database'
+import { requireEnvironment } from '@/lib/data/env'
+import { sheetToCsv } from './sheet-to-csv'
+import { workThrough } from './work-through'
+
+interface SheetTask {
+  readonly task: 'sheet'
+  readonly from: string
+  readonly to: string
+}
+
+/** How long to wait before looking again when nobody has nudged. */
+const IDLE = 2_000
+
+async function workForEver(): Promise<void> {
+  const environment = requireEnvironment()
+  const state = { stopping: false, wake: () => {} }
+  parentPort?.on('message', (message: unknown) => {
+    if (message === 'stop') state.stopping = true
+    state.wake()
+  })
+  const connection = await openBulk(environment)
+  while (!state.stopping) {
+    const worked = await workThrough({
+      connection,
+      read: database().read,
+      dataDir: environment.dataDir,
+      stopAsked: () => state.stopping,
+      progress: (progress) => parentPort?.postMessage(progress),
+    })
+    if (worked || state.stopping) continue
+    await new Promise<void>((resolve) => {
+      const timer = setTimeout(resolve, IDLE)
+      state.wake = () => {
+        clearTimeout(timer)
+        resolve()
+      }
+    })
+  }
+  await connection.close()
+  await database().close()
+  parentPort?.close()
+}
+
+const task = workerData as SheetTask | { readonly task: 'imports' } | null
+
+if (task?.task === 'sheet') parentPort?.postMessage(await sheetToCsv(task.from, task.to))
+else if (task?.task === 'imports') await workForEver()

@@ -1,0 +1,57 @@
+/** Keeps the import's thread alive beside the server, and hands on what it tells. */
+import { join } from 'node:path'
+import { Worker } from 'node:worker_threads'
+
+/** A run needs little memory; one that needs more is ended rather than the server. */
+const limits = { maxOldGenerationSizeMb: 320 }
+
+const key = Symbol.for('ledgerline.import-worker')
+
+/** Milliseconds before a thread that died is started again; each death in a row doubles them. */
+const firstPause = 1_000
+const longestPause = 60_000
+
+/**
+ * Starts the thread. `globalThis[Symbol.for('ledgerline.import-worker')]` gets what services use: `nudge` and
+ * `progress`.
+ * @returns {{ stop(): Promise<void> }}
+ */
+export const startImportWorker = (root) => {
+  const progress = new Map()
+  let worker
+  let stopping = false
+  let pause = firstPause
+  const launch = () => {
+    worker = new Worker(join(root, 'build/workers/import.mjs'), {
+      workerData: { task: 'imports' },
+      resourceLimits: limits,
+      env: process.env,
+    })
+    worker.on('message', (message) => {
+      pause = firstPause
+      progress.set(message.importId, message)
+    })
+    worker.on('error', (error) => console.error('The import thread ended:', error.message))
+    worker.on('exit', () => {
+      if (stopping) return
+      setTimeout(launch, pause).unref()
+      pause = Math.min(longestPause, 2 * pause)
+    })
+  }
+  launch()
+  globalThis[key] = { nudge: () => worker.postMessage('look'), progress }
+  return {
+    stop: () =>
+      new Promise((resolve) => {
+        stopping = true
+        globalThis[key] = undefined
+        // What runs ends after its batch; one that hangs is ended.
+        const giveUp = setTimeout(() => worker.terminate().then(resolve), 5_000)
+        worker.once('exit', () => {
+          clearTimeout(giveUp)
+          resolve()
+        })
+        worker.postMessage('stop')
+      }),
+  }
+}
