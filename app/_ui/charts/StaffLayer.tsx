@@ -36,6 +36,8 @@ export function StaffLayer({
         <rect {...ground} />
       </clipPath>
       <rect className="ground" {...ground} />
+      {/* Codes and days of the last lots reach beyond the plot. */}
+      <rect className="ground" x={plot.x} y={axis.y} width={width - plot.x} height={32} />
       <g clipPath={`url(#${clip})`}>
         <g ref={moved}>
           <ShapesView shapes={plotLayers(wide).flatMap(({ shapes }) => shapes)} />
