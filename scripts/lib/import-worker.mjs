@@ -5,6 +5,9 @@ import { Worker } from 'node:worker_threads'
 /** A run needs little memory; one that needs more is ended rather than the server. */
 const limits = { maxOldGenerationSizeMb: 320 }
 
+/** A spreadsheet unpacks in memory: as much as one may need, and no more. */
+const sheetLimits = { maxOldGenerationSizeMb: 1024 }
+
 const key = Symbol.for('ledgerline.import-worker')
 
 /** Milliseconds before a thread that died is started again; each death in a row doubles them. */
@@ -12,8 +15,24 @@ const firstPause = 1_000
 const longestPause = 60_000
 
 /**
- * Starts the thread. `globalThis[Symbol.for('ledgerline.import-worker')]` gets what services use: `nudge` and
- * `progress`.
+ * Turns a spreadsheet into text in a thread of its own.
+ * @returns {Promise<{ ok: true } | { ok: false, message: string, mend: string }>}
+ */
+export const convertSheet = (root, from, to) =>
+  new Promise((resolve) => {
+    const refuse = (message) => resolve({ ok: false, message, mend: 'Save it as CSV.' })
+    const thread = new Worker(join(root, 'build/workers/import.mjs'), {
+      workerData: { task: 'sheet', from, to },
+      resourceLimits: sheetLimits,
+    })
+    thread.once('message', resolve)
+    thread.once('error', () => refuse('This spreadsheet is too large to be opened.'))
+    thread.once('exit', () => refuse('This spreadsheet can’t be read.'))
+  })
+
+/**
+ * Starts the thread. `globalThis[Symbol.for('ledgerline.import-worker')]` gets what services use: `nudge`,
+ * `progress` and `convert`.
  * @returns {{ stop(): Promise<void> }}
  */
 export const startImportWorker = (root) => {
@@ -39,7 +58,11 @@ export const startImportWorker = (root) => {
     })
   }
   launch()
-  globalThis[key] = { nudge: () => worker.postMessage('look'), progress }
+  globalThis[key] = {
+    nudge: () => worker.postMessage('look'),
+    progress,
+    convert: (from, to) => convertSheet(root, from, to),
+  }
   return {
     stop: () =>
       new Promise((resolve) => {
