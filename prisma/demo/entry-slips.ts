@@ -11,7 +11,8 @@ export interface EntrySlip {
 
 /**
  * Two neighbouring digits with their places changed, 329.7 to 327.9: of the pairs about the point the one that
- * does most below one and a half per cent, as a slip that nobody sees at once.
+ * does most below one and a half per cent, as a slip that nobody sees at once; where those digits are alike, the
+ * first two.
  */
 export function swapped(typed: string): string {
   const point = typed.indexOf('.')
@@ -20,14 +21,18 @@ export function swapped(typed: string): string {
     [point - 1, point + 1],
     [point + 1, point + 2],
   ] as const
-  const texts = pairs.map(([left, right]) => {
+  const withSwapped = ([left, right]: readonly [number, number]): string => {
     const letters = [...typed]
     letters[left] = typed[right] ?? ''
     letters[right] = typed[left] ?? ''
     return letters.join('')
-  })
+  }
   const size = (text: string): number => Math.abs(Number(text) / Number(typed) - 1)
-  return texts.filter((text) => size(text) < 0.015).sort((a, b) => size(b) - size(a))[0] ?? typed
+  const slight = pairs
+    .map(withSwapped)
+    .filter((text) => size(text) < 0.015)
+    .sort((a, b) => size(b) - size(a))[0]
+  return slight !== undefined && size(slight) > 0.003 ? slight : withSwapped([0, 1])
 }
 
 /** What was typed for a frequency where the bench made one of its slips; undefined where it made none. */
