@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { driftOrders } from './drift-view'
 import { codeText } from './plain-text'
 
 export const chartFormats = ['svg', 'png', 'csv', 'pdf'] as const
@@ -10,6 +11,7 @@ export const chartFileSchema = z.object({
   to: codeText('Last lot').optional(),
   /** Names of charts, divided by commas. */
   staves: z.string().max(400, { error: 'That is more staves than there are.' }).optional(),
+  order: z.enum(driftOrders).default('made'),
   theme: z
     .enum(['light', 'dark', 'print'], { error: 'The ground is one of light, dark, print.' })
     .default('print'),

@@ -51,3 +51,12 @@ export function parseStaves(text: string | undefined): readonly ChartChoice[] {
   const chosen = offeredCharts.filter((choice) => asked.has(chartId(choice)))
   return chosen.length > 0 ? chosen : defaultCharts
 }
+
+/** In which order lots stand on a chart: as they were made, or as they were measured, where gauges show. */
+export const driftOrders = ['made', 'measured'] as const
+
+export type DriftOrder = (typeof driftOrders)[number]
+
+/** The order that an address asks for; as made unless it says otherwise. */
+export const parseOrder = (text: string | undefined): DriftOrder =>
+  text === 'measured' ? 'measured' : 'made'

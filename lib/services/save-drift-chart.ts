@@ -13,6 +13,7 @@ import { csvText } from '@/lib/output/csv'
 import { type DriftPaper, driftPdf } from '@/lib/output/drift-pdf'
 import { svgToPng } from '@/lib/output/svg-to-png'
 import { getDrift } from './get-drift'
+import { getMachineDrift } from './get-machine-drift'
 
 export interface ChartFile {
   readonly name: string
@@ -50,10 +51,38 @@ export async function saveDriftChart(
   input: ChartFileInput,
   at: number = Date.now(),
 ): Promise<ChartFile> {
-  const { chart, product, works } = await getDrift(actor, productCode, parseStaves(input.staves))
+  const { chart, product, works } = await getDrift(actor, productCode, parseStaves(input.staves), {
+    order: input.order,
+  })
   return staffChartFile(chart, format, input, {
     code: product.code,
     products: [product.name],
+    works: works.name,
+    timeZone: works.timeZone,
+    at,
+  })
+}
+
+/**
+ * The chart of a machine over its products as a file.
+ * @throws LedgerlineError not-permitted, not-found, bad-input
+ */
+export async function saveMachineChart(
+  actor: Actor | undefined,
+  machineCode: string,
+  format: ChartFormat,
+  input: ChartFileInput,
+  at: number = Date.now(),
+): Promise<ChartFile> {
+  const { chart, machine, products, works } = await getMachineDrift(
+    actor,
+    machineCode,
+    parseStaves(input.staves),
+    { order: input.order },
+  )
+  return staffChartFile(chart, format, input, {
+    code: machine.code,
+    products: products.map((one) => one.name),
     works: works.name,
     timeZone: works.timeZone,
     at,

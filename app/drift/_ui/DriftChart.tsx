@@ -7,6 +7,8 @@ import { useState } from 'react'
 import { clampWindow, newestWindow } from '@/lib/domain/charts/build-staff-chart'
 import { lotHref } from '@/lib/domain/charts/draw-notes'
 import type { LotWindow, StaffChartInput } from '@/lib/domain/charts/staff-chart'
+import type { DriftOrder } from '@/lib/input/drift-view'
+import { type DriftSubject, driftAddress, driftParameters } from './drift-address'
 
 // The drawing of charts is a large part of the script: it comes after the page stands.
 const StaffChart = dynamic(() => import('@/app/_ui/charts/StaffChart').then((part) => part.StaffChart), {
@@ -15,10 +17,11 @@ const StaffChart = dynamic(() => import('@/app/_ui/charts/StaffChart').then((par
 })
 
 interface Props {
-  readonly productCode: string
+  readonly subject: DriftSubject
   readonly input: StaffChartInput
   /** Staves as the address names them; empty for the usual ones. */
   readonly staves: string
+  readonly order: DriftOrder
   /** The lot that somebody followed here. */
   readonly lot?: string
 }
@@ -31,13 +34,8 @@ function startOf(input: StaffChartInput, pointer: number): LotWindow {
   return clampWindow({ from: pointer - half, to: pointer + half }, input.lots.length)
 }
 
-const parametersOf = (values: Readonly<Record<string, string | undefined>>): URLSearchParams =>
-  new URLSearchParams(
-    Object.entries(values).flatMap(([name, value]) => (value ? [[name, value] as [string, string]] : [])),
-  )
-
 /** The chart, and the files of what it shows. What is shown stands in the address, so that it can be sent on. */
-export function DriftChart({ productCode, input, staves, lot }: Props) {
+export function DriftChart({ subject, input, staves, order, lot }: Props) {
   const router = useRouter()
   const followed = input.lots.findIndex((one) => one.code === lot)
   const [window, setWindow] = useState<LotWindow>(() => startOf(input, followed))
@@ -47,13 +45,13 @@ export function DriftChart({ productCode, input, staves, lot }: Props) {
 
   const keep = (next: LotWindow): void => {
     setWindow(next)
-    const address = parametersOf({
-      product: productCode,
+    const address = driftAddress(subject, {
       staves,
+      order,
       from: input.lots[next.from]?.code,
       to: input.lots[next.to]?.code,
     })
-    globalThis.history.replaceState(globalThis.history.state, '', `?${address}`)
+    globalThis.history.replaceState(globalThis.history.state, '', address)
   }
   const follow = (signal: string): void => {
     const place = document.getElementById(`signal-${signal}`)
@@ -61,8 +59,10 @@ export function DriftChart({ productCode, input, staves, lot }: Props) {
     place?.focus({ preventScroll: true })
   }
   const file = (format: string): string => {
-    const parameters = parametersOf({ staves, from: first, to: last })
-    return `/api/v1/drift/${encodeURIComponent(productCode)}/${format}?${parameters}`
+    const parameters = driftParameters(subject, { staves, order, from: first, to: last })
+    parameters.delete(subject.kind)
+    const whose = subject.kind === 'machine' ? 'machines/' : ''
+    return `/api/v1/drift/${whose}${encodeURIComponent(subject.code)}/${format}?${parameters}`
   }
 
   return (

@@ -23,8 +23,10 @@ const stateText = (signal: SignalView, timeZone: string): string => {
 }
 
 /** The heading has named the chart already. */
-const afterName = ({ chartName, sentence }: SignalView): string =>
-  sentence.startsWith(`${chartName}: `) ? sentence.slice(chartName.length + 2) : sentence
+const afterName = ({ chartName, machine, sentence }: SignalView): string => {
+  const name = machine ? `${chartName} on ${machine.name}: ` : `${chartName}: `
+  return sentence.startsWith(name) ? sentence.slice(name.length) : sentence
+}
 
 function Members({ signal, onChart }: { readonly signal: SignalView; readonly onChart: Props['onChart'] }) {
   const [first, last] = [signal.memberCodes[0], signal.memberCodes.at(-1)]
@@ -60,7 +62,8 @@ export function Signal({
   return (
     <li id={`signal-${signal.id}`} tabIndex={-1} data-state={signal.state}>
       <h3>
-        <VerdictMark verdict={signal.rule === 'nine-on-one-side' ? 'run' : 'beyond'} /> {signal.chartName}
+        <VerdictMark verdict={signal.rule === 'nine-on-one-side' ? 'run' : 'beyond'} /> {signal.chartName}{' '}
+        <small>{signal.machine?.name ?? signal.productName}</small>
       </h3>
       <p>{afterName(signal)}</p>
       <Members signal={signal} onChart={onChart} />

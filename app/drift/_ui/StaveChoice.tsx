@@ -1,47 +1,66 @@
 import Link from 'next/link'
 import { chartName } from '@/lib/domain/record/display-unit'
-import { type ChartChoice, chartId, defaultCharts, offeredCharts } from '@/lib/input/drift-view'
-
-/** The address of a product's chart with these staves, the usual ones unnamed. */
-export function stavesParameter(charts: readonly ChartChoice[]): string {
-  const ids = charts.map(chartId).join(',')
-  return ids === defaultCharts.map(chartId).join(',') ? '' : ids
-}
-
-export const driftHref = (productCode: string, staves = '', lot?: string): string =>
-  `/drift?${new URLSearchParams({
-    product: productCode,
-    ...(staves ? { staves } : {}),
-    ...(lot ? { lot } : {}),
-  })}`
+import {
+  type ChartChoice,
+  chartId,
+  type DriftOrder,
+  driftOrders,
+  offeredCharts,
+} from '@/lib/input/drift-view'
+import { type DriftSubject, driftAddress, stavesParameter } from './drift-address'
 
 interface Props {
-  readonly productCode: string
+  readonly subject: DriftSubject
   readonly shown: readonly ChartChoice[]
+  readonly order: DriftOrder
 }
 
-/** Which staves are drawn: each name puts its stave on or takes it off; the last one stays. */
-export function StaveChoice({ productCode, shown }: Props) {
+const orderWords: Readonly<Record<DriftOrder, string>> = {
+  made: 'as made',
+  measured: 'as measured',
+}
+
+/** Which staves are drawn, each name putting its stave on or taking it off, and in which order the lots stand. */
+export function StaveChoice({ order, shown, subject }: Props) {
   const ids = new Set(shown.map(chartId))
   return (
-    <nav className="drift-staves no-print" aria-label="Staves">
-      <span>Staves</span>
-      {offeredCharts.map((choice) => {
-        const id = chartId(choice)
-        const on = ids.has(id)
-        const next = offeredCharts.filter((one) => (one === choice ? !on : ids.has(chartId(one))))
-        return (
+    <div className="drift-choices no-print">
+      <nav className="drift-staves" aria-label="Staves">
+        <span>Staves</span>
+        {offeredCharts.map((choice) => {
+          const id = chartId(choice)
+          const on = ids.has(id)
+          const next = offeredCharts.filter((one) => (one === choice ? !on : ids.has(chartId(one))))
+          return (
+            <Link
+              key={id}
+              href={driftAddress(subject, {
+                staves: stavesParameter(next.length > 0 ? next : [choice]),
+                order,
+              })}
+              prefetch={false}
+              scroll={false}
+              aria-current={on ? 'true' : undefined}
+            >
+              {chartName(choice.characteristic, choice.statistic)}
+            </Link>
+          )
+        })}
+      </nav>
+      <nav className="drift-staves" aria-label="Order of the lots">
+        <span>Lots</span>
+        {driftOrders.map((one) => (
           <Link
-            key={id}
-            href={driftHref(productCode, stavesParameter(next.length > 0 ? next : [choice]))}
+            key={one}
+            href={driftAddress(subject, { staves: stavesParameter(shown), order: one })}
             prefetch={false}
             scroll={false}
-            aria-current={on ? 'true' : undefined}
+            aria-current={one === order ? 'true' : undefined}
           >
-            {chartName(choice.characteristic, choice.statistic)}
+            {orderWords[one]}
           </Link>
-        )
-      })}
-    </nav>
+        ))}
+      </nav>
+    </div>
   )
 }

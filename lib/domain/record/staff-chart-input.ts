@@ -1,5 +1,4 @@
 import type {
-  BarLineInput,
   ChartLimitSet,
   ChartLot,
   ChartSignal,
@@ -12,11 +11,24 @@ import type { SpecificationBody } from '../metrology/specification'
 import type { LotSummaryBody } from '../quality/lot-summary'
 import { limitsOf } from '../quality/tolerances'
 import { differenceFromSi, fromSi } from '../units/unit'
-import { type ChartedStatistic, type FrozenLimits, limitsAt, type StoredSignal } from './chart-history'
+import {
+  type ChartedStatistic,
+  type FrozenLimits,
+  limitsAt,
+  type StoredSignal,
+  targetShift,
+} from './chart-history'
 import { chartValue } from './chart-value'
 import { chartName, chartUnit, type ResultUnits } from './display-unit'
+import { driftBarLines } from './drift-bar-lines'
 
 export interface DriftLot extends ChartLot {
+  readonly productId: number
+  readonly productName: string
+  /** What its specification asks for, SI, by `characteristic statistic`. */
+  readonly targets: Readonly<Record<string, number>>
+  /** Codes of what went into it, by role. */
+  readonly materials: Readonly<Record<string, string>>
   readonly die: string | undefined
   readonly machine: string | undefined
   readonly setting: string
@@ -27,6 +39,8 @@ export interface DriftLot extends ChartLot {
 }
 
 export interface DriftLimits extends FrozenLimits {
+  /** Whose they are, on a chart over several products. */
+  readonly productId?: number
   readonly provisional: boolean
   /** "2 Sep, M. Orrin". */
   readonly detail: string
@@ -67,7 +81,7 @@ export function staffChartInput(facts: DriftFacts): StaffChartInput {
       ...(monthLabel === undefined ? {} : { monthLabel }),
     })),
     staves: facts.charts.map((chart) => staveOf(chart, facts)),
-    barLines: barLines(facts),
+    barLines: driftBarLines(facts.lots, facts.charts),
   }
 }
 
@@ -88,7 +102,12 @@ function staveOf(chart: DriftChart, facts: DriftFacts): StaveInput {
     oneSided: characteristics[characteristic].oneSided || statistic === 'within-lot-sd',
     values: facts.lots.map((lot) => optional(chartValue(statistic, lot.summaries[characteristic]))),
     leftOut: facts.lots.flatMap((lot, index) => (sets[index]?.leftOut.includes(lot.lotId) ? [index] : [])),
-    limitSets: segments(sets, chart.limitSets, optional, (sigma) => differenceFromSi(sigma, unit)),
+    limitSets: segments(
+      facts.lots.map((lot, index) => shiftedSet(sets[index], lot, `${characteristic} ${statistic}`)),
+      chart.limitSets,
+      optional,
+      (sigma) => differenceFromSi(sigma, unit),
+    ),
     ...(tolerance ? { tolerance } : {}),
     signals: chart.signals.flatMap(({ members, ...signal }): ChartSignal[] => {
       const drawn = members.flatMap((lotId) => indexOf.get(lotId) ?? []).sort((a, b) => a - b)
@@ -112,80 +131,46 @@ function toleranceOf(
   }
 }
 
-/** Runs of lots that one limit set holds for. */
+interface ShiftedSet {
+  readonly set: FrozenLimits
+  /** How far a moved target takes it, SI. */
+  readonly shift: number
+}
+
+const shiftedSet = (
+  set: FrozenLimits | undefined,
+  { targets }: DriftLot,
+  chart: string,
+): ShiftedSet | undefined => {
+  const target = targets[chart]
+  return set && { set, shift: targetShift(set, target === undefined ? {} : { target }) }
+}
+
+/** Runs of lots that one limit set holds for, and one target. */
 function segments(
-  sets: readonly (FrozenLimits | undefined)[],
+  sets: readonly (ShiftedSet | undefined)[],
   all: readonly DriftLimits[],
   show: (value: number | undefined) => number | undefined,
   spread: (sigma: number) => number,
 ): readonly ChartLimitSet[] {
-  const found: { set: FrozenLimits; fromIndex: number; toIndex: number }[] = []
-  sets.forEach((set, index) => {
+  const found: (ShiftedSet & { readonly fromIndex: number; toIndex: number })[] = []
+  sets.forEach((one, index) => {
     const last = found.at(-1)
-    if (!set) return
-    if (last && last.set.id === set.id && last.toIndex === index - 1) last.toIndex = index
-    else found.push({ set, fromIndex: index, toIndex: index })
+    if (!one) return
+    if (last && last.set.id === one.set.id && last.shift === one.shift && last.toIndex === index - 1)
+      last.toIndex = index
+    else found.push({ ...one, fromIndex: index, toIndex: index })
   })
-  return found.map(({ set, fromIndex, toIndex }) => ({
+  const moved = (value: number | undefined, shift: number) =>
+    value === undefined ? undefined : value + shift
+  return found.map(({ fromIndex, set, shift, toIndex }) => ({
     fromIndex,
     toIndex,
     number: set.number,
-    centre: show(set.centre) ?? set.centre,
+    centre: show(set.centre + shift) ?? set.centre,
     sigma: spread(set.sigma),
-    lower: show(set.lower),
-    upper: show(set.upper),
+    lower: show(moved(set.lower, shift)),
+    upper: show(moved(set.upper, shift)),
     provisional: all.find((one) => one.id === set.id)?.provisional ?? false,
   }))
-}
-
-/** Something is different from the lot before: die, machine, setting, specification, or the limits of a chart. */
-function barLines(facts: DriftFacts): readonly BarLineInput[] {
-  return facts.lots.flatMap((lot, atIndex): BarLineInput[] => {
-    const before = facts.lots[atIndex - 1]
-    if (!before) return []
-    const line = (kind: BarLineInput['kind'], reason: string, detail = lot.detail): BarLineInput => ({
-      atIndex,
-      kind,
-      reason,
-      detail,
-    })
-    return [
-      ...(lot.die !== before.die
-        ? [line('die', lot.die === undefined ? 'no die named' : `${lot.die} in`)]
-        : []),
-      ...(lot.machine !== before.machine ? [line('machine', lot.machine ?? 'no machine named')] : []),
-      ...(lot.setting !== before.setting
-        ? [line('setting', lot.setting === '' ? 'usual setting' : lot.setting)]
-        : []),
-      ...(lot.specificationNumber !== before.specificationNumber
-        ? [line('specification', `specification revision ${lot.specificationNumber}`)]
-        : []),
-      ...limitSetLine(facts, before, lot, atIndex),
-    ]
-  })
-}
-
-function limitSetLine(
-  { charts }: DriftFacts,
-  before: DriftLot,
-  lot: DriftLot,
-  atIndex: number,
-): readonly BarLineInput[] {
-  const changed = charts.flatMap(({ limitSets }) => {
-    const set = limitsAt(limitSets, lot.madeAt)
-    return set && set.id !== limitsAt(limitSets, before.madeAt)?.id
-      ? [limitSets.find((one) => one.id === set.id) ?? []].flat()
-      : []
-  })
-  const [first] = changed
-  if (!first) return []
-  const same = changed.every((one) => one.number === first.number)
-  return [
-    {
-      atIndex,
-      kind: 'limit-set',
-      reason: same ? `limit set ${first.number}` : 'new limit sets',
-      detail: first.detail,
-    },
-  ]
 }

@@ -147,7 +147,7 @@ describe('the number of drawn marks', { timeout: PATIENCE }, () => {
   })
 })
 
-const anyYears = fc.record({
+const anyYears: fc.Arbitrary<Years> = fc.record({
   lots: fc.integer({ min: 1, max: 2000 }),
   seed: fc.nat(),
   beyond: fc.constantFrom(0, 0.003, 0.05, 0.5),
@@ -158,7 +158,7 @@ const anyPart = fc.tuple(
   fc.double({ min: 0, max: 1, noNaN: true }),
   fc.double({ min: 0, max: 1, noNaN: true }),
 )
-const anyView = fc.tuple(anyYears, anyPart, fc.constantFrom(360, 700, 964, 1400))
+const anyView = fc.tuple(anyYears, anyPart, fc.constantFrom<number>(360, 700, 964, 1400))
 
 /** Where chance alone seldom leads: far more signals and runs than px. */
 const crowded: [Years, [number, number], number] = [
