@@ -12,8 +12,8 @@ import { createRig } from '@/lib/services/keep-rig'
 import { createWeight } from '@/lib/services/keep-weight'
 import { alderNylon } from './alder'
 import { demoGauges, demoMachines, demoPeople, demoRigs, demoWeights, demoWorks } from './equipment'
-import { demoProducts } from './products'
-import { demoSchedule } from './schedule'
+import { demoProducts, productOf } from './products'
+import { type DemoSchedule, demoSchedule } from './schedule'
 import { workingDay } from './working-days'
 
 export type DemoUsername = (typeof demoPeople)[number]['username']
@@ -80,22 +80,36 @@ async function keepCatalogue(founding: Actor, at: number): Promise<void> {
     },
     at,
   )
-  for (const { code, construction, family, materialCode, name, revised, specification } of demoProducts) {
+  for (const { code, construction, family, materialCode, name, specification } of demoProducts) {
     await createProduct(founding, { code, name, family, construction }, at)
-    const issue = (effectiveFrom: number, note: string, specificationBody: typeof specification) =>
-      issueSpecification(
-        founding,
-        { productCode: code, materialCode, effectiveFrom, note, specification: { body: specificationBody } },
-        at,
-      )
-    await issue(at, '', specification)
-    if (revised) await issue(revisedFrom(code, revised.from), revised.note, revised.specification)
+    await issueSpecification(
+      founding,
+      {
+        productCode: code,
+        materialCode,
+        effectiveFrom: at,
+        note: '',
+        specification: { body: specification },
+      },
+      at,
+    )
   }
 }
 
-/** Midnight before the first lot that is made to the later revision. */
-function revisedFrom(productCode: string, index: number): number {
-  const lot = demoSchedule().find((one) => one.productCode === productCode && one.index === index)
-  if (!lot) throw new Error(`The demo has no lot ${index} of ${productCode}.`)
-  return workingDay(lot.day)
+/** Before the first lot that is made to a later revision, quality issues it: in force from that day on. */
+export async function reviseBefore(quality: Actor, lot: DemoSchedule): Promise<void> {
+  const { code, materialCode, revised } = productOf(lot.productCode)
+  if (revised?.from !== lot.index) return
+  const { note, specification } = revised
+  await issueSpecification(
+    quality,
+    {
+      productCode: code,
+      materialCode,
+      effectiveFrom: workingDay(lot.day),
+      note,
+      specification: { body: specification },
+    },
+    lot.openedAt - 2 * 3_600_000,
+  )
 }

@@ -1,7 +1,7 @@
 import { database } from '@/lib/data/database'
 import { isWorksMissing } from '@/lib/services/works-missing'
 import { demoPeople } from './equipment'
-import { type DemoActors, demoPassword, foundDemoWorks } from './found-works'
+import { type DemoActors, demoPassword, foundDemoWorks, reviseBefore } from './found-works'
 import { measureLot } from './measure-lots'
 import { demoDatasheets, publishDemoDatasheet } from './papers'
 import { receiveMaterials } from './receive-materials'
@@ -54,6 +54,7 @@ export async function loadDemoWorks(tell: (line: string) => void): Promise<'load
     const left = lots.length - 1 - index
     const specimens = specimensOf(lot)
     await publishUntil(lot.day, actors, published)
+    await reviseBefore(actors.orrin, lot)
     await receiveMaterials(actors.orrin, lot, received)
     await measureLot(actors[lot.maker], lot, specimens, true)
     if (left >= UNDECIDED && specimens === 5 && !waitsForDie(lot))

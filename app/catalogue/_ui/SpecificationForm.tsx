@@ -58,7 +58,7 @@ export function SpecificationForm({ product, works, materials, rigs, today }: Sp
           <SelectField
             name="coreShape"
             label="Core"
-            hint="What bears the load of a wound string, of the material above."
+            hint="Bears the load of a wound string."
             none="none: a plain string"
             value={body?.core?.shape}
             options={[
