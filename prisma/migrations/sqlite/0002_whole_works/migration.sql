@@ -132,7 +132,13 @@ CREATE UNIQUE INDEX "LotMaterial_lotId_role_place_key" ON "LotMaterial"("lotId",
 CREATE INDEX "Signal_machineId_idx" ON "Signal"("machineId");
 
 -- CreateIndex
+CREATE INDEX "Disposition_decidedAt_idx" ON "Disposition"("decidedAt");
+
+-- CreateIndex
 CREATE INDEX "Lot_madeAt_code_idx" ON "Lot"("madeAt", "code");
 
 -- CreateIndex
 CREATE INDEX "Lot_dieId_madeAt_idx" ON "Lot"("dieId", "madeAt");
+
+-- CreateIndex
+CREATE INDEX "Lot_measuredAt_idx" ON "Lot"("measuredAt");
