@@ -10,8 +10,9 @@ import { modelFacts } from '@/lib/domain/metrology/model-facts'
 import type { SpecimenSheet, TypedValue } from '@/lib/domain/metrology/sheet'
 import { understandEntry } from '@/lib/domain/metrology/understand-entry'
 import type { Result } from '@/lib/domain/result'
+import { loadBearingSection } from '@/lib/domain/strings/load-bearing'
 import { soundedFundamental } from '@/lib/domain/strings/sounding-forward'
-import { plainWireAxialStiffness, plainWireBendingStiffness } from '@/lib/domain/strings/stiffness'
+import { axialStiffness, bendingStiffness } from '@/lib/domain/strings/stiffness'
 import { formatQuantity } from '@/lib/domain/units/format'
 import {
   degreesCelsius,
@@ -209,13 +210,14 @@ export function expectedFrequency(
   const weighed = results.massPerMetreWeighed
   const diameter = metres(results.diameter ?? specification.diameter.target)
   const modulus = material.youngsModulus.value
+  const bearing = loadBearingSection(specification.core, diameter)
   const value = soundedFundamental(
     {
       force: steps.force,
       span: sheet.span?.si ?? metres(rig.span.value),
       endCondition: rig.endCondition,
-      axialStiffness: plainWireAxialStiffness(modulus, diameter),
-      bendingStiffness: plainWireBendingStiffness(modulus, diameter),
+      axialStiffness: axialStiffness(modulus, bearing.area),
+      bendingStiffness: bendingStiffness(modulus, bearing.secondMoment),
       outerDiameter: diameter,
       air: { density: facts.airDensity, viscosity: facts.airViscosity },
     },

@@ -11,8 +11,8 @@ import { judgeLot, type LotJudgement } from '@/lib/domain/quality/judge-lot'
 import { judgeSpecimen } from '@/lib/domain/quality/judge-specimen'
 import { summariseLot } from '@/lib/domain/quality/lot-summary'
 import { guardFactorOf, limitsOf, tolerancedCharacteristics } from '@/lib/domain/quality/tolerances'
+import { loadBearingSection } from '@/lib/domain/strings/load-bearing'
 import { noteName } from '@/lib/domain/strings/pitch'
-import { roundArea } from '@/lib/domain/strings/round-section'
 import { breakingLoad, tensileStrengthAt } from '@/lib/domain/strings/strength'
 import { decimalsForUncertainty, formatNumber, formatQuantity } from '@/lib/domain/units/format'
 import { differenceFromSi, fromSi, type UnitId } from '@/lib/domain/units/unit'
@@ -325,9 +325,9 @@ function cautionOf(
   evaluations: readonly (SpecimenEvaluation | undefined)[],
 ): LiveLot['caution'] {
   const { material, rig, specification, weights, gravity } = view.context
-  const diameter = specification.diameter.target
-  const strength = tensileStrengthAt(material, diameter)
-  const breaking = strength && breakingLoad(strength.low, roundArea(diameter))
+  const bearing = loadBearingSection(specification.core, specification.diameter.target)
+  const strength = tensileStrengthAt(material, bearing.size)
+  const breaking = strength && breakingLoad(strength.low, bearing.area)
   const hung = weights
     .filter((one) => one.code === rig?.hangerCode || rig?.weightCodes.includes(one.code))
     .reduce((sum, one) => sum + one.mass.value, 0)
