@@ -32,12 +32,16 @@ export function planProgress(
   }
 }
 
-/** What one specimen lacks by the plan, in words that follow "lacks". */
+/**
+ * What one specimen lacks by the plan, in words that follow "lacks". A piece marked at both edges under load is
+ * as long as the span, which stands in for its cut length.
+ */
 export function missingOf(plan: InspectionPlan, sheet: SpecimenSheet): readonly string[] {
   const planned = plan.positions * plan.directions
   const missing: string[] = []
   if (sheet.diameters.length < planned) missing.push(`diameters (${sheet.diameters.length} of ${planned})`)
-  if (!holdsAct(sheet, 'weighing') || sheet.cutLength === undefined) missing.push('the weighing')
+  const needsLength = sheet.weighedState === 'slack' && sheet.cutLength === undefined
+  if (!holdsAct(sheet, 'weighing') || needsLength) missing.push('the weighing')
   if (!holdsAct(sheet, 'sounding') || sheet.load === undefined || sheet.span === undefined)
     missing.push('the sounding')
   return missing
