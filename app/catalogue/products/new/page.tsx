@@ -35,7 +35,10 @@ export default roomPage(async (actor) => {
           <SelectField
             name="construction"
             label="Construction"
-            options={[{ value: 'plain', label: 'plain: one solid round wire' }]}
+            options={[
+              { value: 'plain', label: 'plain: one solid round wire' },
+              { value: 'wound', label: 'wound: a core with wraps' },
+            ]}
           />
         </div>
         <div className="actions">
