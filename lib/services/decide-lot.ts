@@ -1,10 +1,10 @@
 import type { Actor } from '@/lib/access/actor'
 import { permit } from '@/lib/access/permit'
-import { loadChartHistories } from '@/lib/data/chart-histories'
 import { database, type Tx } from '@/lib/data/database'
 import { type DispositionRow, insertDisposition, listDispositions } from '@/lib/data/dispositions'
 import { sha256 } from '@/lib/data/hash'
 import { appendLedger } from '@/lib/data/ledger'
+import { frozenLimitsOf, type LimitSetRow, listLimitSets } from '@/lib/data/limit-sets'
 import { lockLot, lockRow } from '@/lib/data/locks'
 import { findLotId, getLotRow, type LotRow, updateLotState } from '@/lib/data/lots'
 import { listPersonNames } from '@/lib/data/people-names'
@@ -166,7 +166,11 @@ function requireAnswers(input: DecideLotInput, lot: LotRow, stops: readonly Stop
 }
 
 async function evidenceOf(tx: Tx, lot: LotRow, loaded: LoadedLot): Promise<DecisionEvidence> {
-  const charts = await loadChartHistories(tx, lot.product.id)
+  const sets = await listLimitSets(tx, lot.product.id)
+  const isInForce = ({ characteristic, id, statistic }: LimitSetRow): boolean => {
+    const own = sets.filter((one) => one.characteristic === characteristic && one.statistic === statistic)
+    return limitsAt(own.map(frozenLimitsOf), lot.madeAt)?.id === id
+  }
   return {
     lot: lot.code,
     lotVersion: lot.version,
@@ -177,10 +181,9 @@ async function evidenceOf(tx: Tx, lot: LotRow, loaded: LoadedLot): Promise<Decis
         ? [{ specimen: number, evaluation: evaluation.number, inputHash: evaluation.inputHash }]
         : [],
     ),
-    limitSets: charts.flatMap(({ characteristic, statistic, limitSets }) => {
-      const set = limitsAt(limitSets, lot.madeAt)
-      return set ? [{ characteristic, statistic, number: set.number }] : []
-    }),
+    limitSets: sets
+      .filter(isInForce)
+      .map(({ characteristic, number, statistic }) => ({ characteristic, statistic, number })),
     signals: loaded.signals.map(({ id, sentence, state, cause }) => ({ id, sentence, state, cause })),
   }
 }

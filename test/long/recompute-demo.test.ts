@@ -9,7 +9,7 @@ import { useFreshDatabase } from '../support/template-database'
 
 const whole = Number(process.env.LEDGERLINE_SHARE ?? '1') >= 1
 
-/** Whole: all 340 lots. In little: thirty of Larch 279, whose first limits are frozen after twenty-five. */
+/** Whole: all 740 lots, which takes some minutes. In little: thirty of Larch 279, whose first limits are frozen after twenty-five. */
 const lots = demoSchedule().filter(
   (lot) => whole || (lot.micrometres === WIDE_DIE.micrometres && lot.index < 30),
 )

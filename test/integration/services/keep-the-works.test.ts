@@ -314,7 +314,9 @@ describeOnEachEngine('keeping the works', () => {
         ),
       ).toMatchObject({ code: 'not-found' })
       await setRigActive(quality, 'RIG-2', version, false)
-      expect((await listEquipment(quality)).rigs[0]).toMatchObject({ active: false })
+      expect((await listEquipment(quality)).rigs.find(({ code }) => code === 'RIG-2')).toMatchObject({
+        active: false,
+      })
       await setRigActive(quality, 'RIG-2', version + 1, true)
     })
   })
