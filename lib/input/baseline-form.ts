@@ -75,6 +75,7 @@ export function parseBaseline(fields: Fields): Result<ProposeLimitsInput> {
     firstLotCode: filled(fields.first),
     lastLotCode: filled(fields.last),
     leftOut: leftOut.value,
+    alike: fields.alike === 'yes' ? true : fields.alike === 'no' ? false : undefined,
   })
 }
 

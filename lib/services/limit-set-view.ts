@@ -15,6 +15,8 @@ export interface LimitSetView {
   readonly sigmaEstimator: string
   readonly lotCount: number
   readonly provisional: boolean
+  /** Rules that are asked of it; undefined for all. */
+  readonly rules: LimitSetRow['rules']
   readonly firstLotCode: string | undefined
   readonly lastLotCode: string | undefined
   readonly leftOut: readonly { readonly lotCode: string; readonly reason: string }[]
@@ -41,6 +43,7 @@ export const limitSetView = (
   sigmaEstimator: row.sigmaEstimator,
   lotCount: row.lotCount,
   provisional: row.provisional,
+  rules: row.rules,
   firstLotCode: row.baseline.lots[0]?.code,
   lastLotCode: row.baseline.lots.at(-1)?.code,
   leftOut: row.baseline.leftOut.map(({ code, reason }) => ({ lotCode: code, reason })),

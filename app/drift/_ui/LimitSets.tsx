@@ -41,7 +41,9 @@ export function LimitSets({ sets, works }: Props) {
             </span>
             <span className="small">
               {lotsText(set)}, {set.sigmaEstimator}
-              {set.provisional ? ', provisional' : ''}; frozen {formatDate(set.frozenAt, works.timeZone)}
+              {set.provisional ? ', provisional' : ''}
+              {set.rules?.includes('nine-on-one-side') === false ? ', runs not asked for' : ''}; frozen{' '}
+              {formatDate(set.frozenAt, works.timeZone)}
               {set.frozenBy ? ` by ${set.frozenBy}` : ''}
               {set.reason ? `: “${set.reason}”` : ''}
             </span>

@@ -80,6 +80,16 @@ export default roomPage(async (actor, { query }) => {
             </p>
           </div>
         </div>
+        <div className="fields">
+          <div className="field">
+            <label htmlFor="limits-alike">Neighbouring lots are alike by nature</label>
+            <select id="limits-alike" name="alike" className="input" defaultValue={query.alike ?? ''}>
+              <option value="">as the lots themselves say</option>
+              <option value="yes">yes: spread of all lots, no runs</option>
+              <option value="no">no: moving ranges, runs asked for</option>
+            </select>
+          </div>
+        </div>
         <div className="actions">
           <button type="submit" className="button">
             Propose
@@ -265,7 +275,7 @@ function FreezeForm({
   const iso = (at: number): string => new Date(at).toISOString()
   return (
     <ActionForm action={freezeLimitsAction} label={`Freeze limit set ${number}`}>
-      {(['product', 'chart', 'first', 'last', 'leftOut'] as const).map((name) => (
+      {(['product', 'chart', 'first', 'last', 'leftOut', 'alike'] as const).map((name) => (
         <input key={name} type="hidden" name={name} value={asked[name] ?? ''} />
       ))}
       <input type="hidden" name="supersedes" value={number - 1} />

@@ -1,16 +1,14 @@
 import { beforeAll, expect, it } from 'vitest'
 import { database } from '@/lib/data/database'
-import { sha256 } from '@/lib/data/hash'
-import { insertProduct } from '@/lib/data/products'
-import { insertSpecification } from '@/lib/data/specifications'
 import { freezeLimits } from '@/lib/services/freeze-limits'
 import { openLot } from '@/lib/services/open-lot'
 import { recordSpecimens } from '@/lib/services/record-specimens'
 import { csvOf, type SpecimenOfFile, steelRow } from '../../support/bench-file'
 import { importText } from '../../support/import-run'
+import { addProduct } from '../../support/second-product'
 import { typedHertz, typedMass, typedMetres } from '../../support/sheets'
 import { calmTenths } from '../../support/steel-lots'
-import { BEGIN, day, requestOf, type SteelWorks, setUpSteelWorks, thick } from '../../support/steel-works'
+import { day, requestOf, type SteelWorks, setUpSteelWorks, thick } from '../../support/steel-works'
 import { describeOnEachEngine, useFreshDatabase } from '../../support/template-database'
 
 const AT = day(400)
@@ -37,26 +35,7 @@ const specimensOf = (lot: (typeof lots)[number]): readonly SpecimenOfFile[] =>
 
 async function setUp(): Promise<SteelWorks> {
   const works = await setUpSteelWorks()
-  await database().write(async (tx) => {
-    const first = await tx.specificationRevision.findFirstOrThrow()
-    const product = await insertProduct(
-      tx,
-      'L255',
-      { name: 'Larch 255', family: 'Larch', construction: 'plain' },
-      BEGIN,
-    )
-    await insertSpecification(tx, {
-      productId: product.id,
-      number: 1,
-      effectiveFrom: BEGIN - HOUR,
-      materialId: first.materialId,
-      body: first.body,
-      hash: sha256(first.body),
-      note: '',
-      issuedAt: BEGIN,
-      issuedById: works.quality.personId,
-    })
-  })
+  await addProduct('L255', 'Larch 255')
   return works
 }
 

@@ -53,6 +53,18 @@ describe('parseBaseline', () => {
   })
 })
 
+describe('parseBaseline: lots that are alike', () => {
+  it.each([
+    ['yes', true],
+    ['no', false],
+    ['', undefined],
+    [undefined, undefined],
+  ])('%s is %s', (alike, read) => {
+    const parsed = parseBaseline({ product: 'L254', chart: 'diameter', alike })
+    expect(parsed.ok && parsed.value.alike).toBe(read)
+  })
+})
+
 describe('parseBaselineForm', () => {
   const fields = { product: 'L254', chart: 'diameter', supersedes: '0', reason: 'First sixty lots.' }
 
