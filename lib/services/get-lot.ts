@@ -3,7 +3,7 @@ import { permit } from '@/lib/access/permit'
 import { statisticOf } from '@/lib/data/chart-histories'
 import { database, type Tx } from '@/lib/data/database'
 import { listDispositions } from '@/lib/data/dispositions'
-import { listLedgerOf } from '@/lib/data/ledger-reading'
+import { listImportBatches, listLedgerOf } from '@/lib/data/ledger-reading'
 import { frozenLimitsOf, listLimitSets } from '@/lib/data/limit-sets'
 import { listLotMaterials } from '@/lib/data/lot-materials'
 import { findLotByCode, type LotRow } from '@/lib/data/lots'
@@ -52,6 +52,8 @@ export interface LotMaterialView {
 
 export interface HistoryEntry {
   readonly sequence: number
+  /** What it was done to: the lot, or the import that brought it. */
+  readonly subject: string
   readonly at: number
   readonly person: string | undefined
   readonly verb: string
@@ -119,7 +121,17 @@ export async function getLot(actor: Actor | undefined, code: string): Promise<Lo
   const loaded = await loadLot(read, lot)
   const dispositions = await listDispositions(read, lot.id)
   const materials = (await listLotMaterials(read, [lot.id])).get(lot.id) ?? []
-  const ledger = await listLedgerOf(read, `lot ${lot.code}`)
+  const own = await listLedgerOf(read, `lot ${lot.code}`)
+  // What came from a file was stored with others in one entry, which carries the same instant.
+  const written = [
+    lot.createdAt,
+    ...loaded.specimens.flatMap((one) => one.readings.map((reading) => reading.recordedAt)),
+  ]
+  const batches = await listImportBatches(read, [...new Set(written)])
+  const imports = batches.filter(
+    (one, index) => batches.findIndex(({ subject }) => subject === one.subject) === index,
+  )
+  const ledger = [...own, ...imports].sort((a, b) => a.sequence - b.sequence)
   const names = await listPersonNames(
     read,
     [
@@ -177,8 +189,9 @@ export async function getLot(actor: Actor | undefined, code: string): Promise<Lo
         evidence: JSON.parse(evidence) as DecisionEvidence,
       }
     }),
-    history: ledger.map(({ sequence, at, personId, verb, body }) => ({
+    history: ledger.map(({ sequence, subject, at, personId, verb, body }) => ({
       sequence,
+      subject,
       at,
       person: nameOf(personId),
       verb,

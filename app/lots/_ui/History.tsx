@@ -1,3 +1,4 @@
+import Link from 'next/link'
 import { formatDateTime } from '@/app/_ui/format/dates'
 import type { DispositionVerb } from '@/lib/domain/quality/propose-disposition'
 import type { HistoryEntry, LotView } from '@/lib/services/get-lot'
@@ -8,6 +9,7 @@ const words: Readonly<Record<string, string>> = {
   'record-specimens': 'Measured',
   'supersede-reading': 'Corrected',
   'change-materials': 'Made of',
+  'import-rows': 'From a file',
 }
 
 const verbOf = (entry: HistoryEntry): string => {
@@ -70,7 +72,13 @@ export function History({ view }: { readonly view: LotView }) {
               {formatDateTime(entry.at, view.works.timeZone)}
             </time>
             <b>{verbOf(entry)}</b>
-            <span>{textOf(entry)}</span>
+            <span>
+              {entry.verb === 'import-rows' ? (
+                <Link href={`/lots/import/${entry.subject.replace('import ', '')}`}>{entry.subject}</Link>
+              ) : (
+                textOf(entry)
+              )}
+            </span>
             <span className="who">{entry.person ?? ''}</span>
           </li>
         ))}

@@ -1,6 +1,7 @@
 import { beforeAll, expect, it } from 'vitest'
 import { database } from '@/lib/data/database'
 import { freezeLimits } from '@/lib/services/freeze-limits'
+import { getLot } from '@/lib/services/get-lot'
 import { openLot } from '@/lib/services/open-lot'
 import { recordSpecimens } from '@/lib/services/record-specimens'
 import { csvOf, type SpecimenOfFile, steelRow } from '../../support/bench-file'
@@ -127,6 +128,7 @@ describeOnEachEngine('the same specimens through the app and through the worker'
   type Tables = Awaited<ReturnType<typeof tables>>
   let app: Tables
   let worker: Tables
+  let imported: SteelWorks
 
   describeOnEachEngine('through the app', () => {
     useFreshDatabase()
@@ -146,11 +148,20 @@ describeOnEachEngine('the same specimens through the app and through the worker'
     useFreshDatabase()
     beforeAll(async () => {
       const works = await setUp()
+      imported = works
       await throughTheWorker(works, lots.slice(0, 48))
       await freezeAll(works)
       await throughTheWorker(works, lots.slice(48))
       worker = await tables()
     }, 120_000)
+    it('tells in the history of a lot which import brought it', async () => {
+      const { history } = await getLot(imported.quality, 'T-001')
+      expect(history.map(({ person, subject, verb }) => [verb, subject, person])).toEqual([
+        // Both runs of this test have one instant; a clock gives each its own.
+        ['import-rows', 'import 1', 'T. Aldous'],
+        ['import-rows', 'import 2', 'T. Aldous'],
+      ])
+    })
     it('stores 300 specimens', () => {
       expect(worker.specimens).toHaveLength(300)
     })

@@ -135,6 +135,9 @@ CREATE INDEX "Signal_machineId_idx" ON "Signal"("machineId");
 CREATE INDEX "Disposition_decidedAt_idx" ON "Disposition"("decidedAt");
 
 -- CreateIndex
+CREATE INDEX "LedgerEntry_at_idx" ON "LedgerEntry"("at");
+
+-- CreateIndex
 CREATE INDEX "Lot_madeAt_code_idx" ON "Lot"("madeAt", "code");
 
 -- CreateIndex
