@@ -4,6 +4,7 @@ import { listLotStates, listSignalsOfToday } from '@/lib/data/today-desks'
 import type { ControlRule } from '@/lib/domain/control/find-signals'
 import { signalEvents } from '@/lib/domain/quality/signal-events'
 import { chartName } from '@/lib/domain/record/display-unit'
+import { signalHref } from '@/lib/domain/record/signal-href'
 import { signalSentence } from '@/lib/domain/record/signal-sentence'
 import {
   type AskedToday,
@@ -40,13 +41,13 @@ export async function signalsOfToday(asked: AskedToday): Promise<FoundToday> {
 function eventItem(
   event: readonly Open[],
   lots: Lots,
-  machines: ReadonlyMap<number, { readonly name: string }>,
+  machines: ReadonlyMap<number, { readonly code: string; readonly name: string }>,
   { at, works }: AskedToday,
 ): readonly WaitingItem[] {
   // What runs over products says more than what one of them shows: it names the machine.
   const first = event.find((one) => one.machineId !== undefined) ?? event[0]
   if (!first || !isCharacteristic(first.characteristic)) return []
-  const machine = machines.get(first.machineId ?? 0)?.name
+  const machine = machines.get(first.machineId ?? 0)
   const codes = (signal: Open): readonly string[] => signal.members.flatMap((id) => lots.get(id)?.code ?? [])
   const members = [...new Set(event.flatMap((one) => one.members))].flatMap((id) => lots.get(id) ?? [])
   const waiting = members.filter((lot) => lot.state === 'to-decide').length
@@ -69,7 +70,7 @@ function eventItem(
       characteristic: first.characteristic,
       statistic: statisticOf(first.statistic),
       memberCodes: codes(first),
-      ...(machine === undefined ? {} : { machineName: machine }),
+      ...(machine === undefined ? {} : { machineName: machine.name }),
     },
     works.units,
     works.numberFormat,
@@ -81,11 +82,16 @@ function eventItem(
       key: `signal ${first.id}`,
       since: Math.min(...event.map((one) => one.raisedAt)),
       mark: first.rule === 'nine-on-one-side' ? 'run' : 'beyond',
-      title: `${machine ?? namesOf(products, 2)}: ${namesOf(charts, 2)}`,
+      title: `${machine?.name ?? namesOf(products, 2)}: ${namesOf(charts, 2)}`,
       text: `${sentence}${others > 0 ? ` ${others === 1 ? 'One more signal' : `${others} more signals`} of the same lots.` : ''} It rejects no lot, and is answered before release.`,
       stake: `${counted(members.length, 'lot', 'lots')}${machine === undefined ? '' : ` of ${namesOf(products, 2)}`}${waiting > 0 ? `, ${waiting} to decide` : ''}`,
       waiting: agoOf(Math.min(...event.map((one) => one.raisedAt)), at),
-      href: `/drift?product=${encodeURIComponent(first.product.code)}#signal-${first.id}`,
+      href: signalHref({
+        id: first.id,
+        productCode: first.product.code,
+        lotCode: codes(first).at(-1),
+        machineCode: machine?.code,
+      }),
       deed: 'Answer',
     },
   ]

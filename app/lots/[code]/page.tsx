@@ -4,6 +4,7 @@ import { roomPage } from '@/app/_page'
 import { EmptyState } from '@/app/_ui/shell/EmptyState'
 import { may } from '@/lib/access/permit'
 import { isFinal } from '@/lib/domain/record/lot-state'
+import { signalHref } from '@/lib/domain/record/signal-href'
 import { getLot } from '@/lib/services/get-lot'
 import { listMaterialsInUse } from '@/lib/services/list-materials-in'
 import { History } from '../_ui/History'
@@ -39,7 +40,7 @@ export default roomPage(async (actor, { params }) => {
         <ul className="rows">
           {signals.map((signal) => (
             <li key={signal.id}>
-              <Link href={`/drift?product=${encodeURIComponent(signal.productCode)}#signal-${signal.id}`}>
+              <Link href={signalHref({ ...signal, machineCode: signal.machine?.code })}>
                 {signal.sentence}
               </Link>
               <em className={signal.state === 'open' ? 'vermilion' : 'slate'}>

@@ -10,6 +10,7 @@ import { Notice } from '@/app/_ui/shell/Notice'
 import { may } from '@/lib/access/permit'
 import { dispositionVerbs } from '@/lib/domain/quality/propose-disposition'
 import { isFinal } from '@/lib/domain/record/lot-state'
+import { signalHref } from '@/lib/domain/record/signal-href'
 import { getLot } from '@/lib/services/get-lot'
 import { LotHead } from '../../_ui/LotHead'
 import { Reasons } from '../../_ui/Reasons'
@@ -36,6 +37,7 @@ export default roomPage(async (actor, { params }) => {
   const decides = may(actor, 'lots.decide')
   const asked = proposal.stops.filter((stop) => !stop.id.startsWith('signal-'))
   const signals = view.signals.filter((one) => one.state === 'open')
+  const [first] = signals
   const current = dispositions.find((one) => one.current)
   return (
     <>
@@ -104,16 +106,12 @@ export default roomPage(async (actor, { params }) => {
             ) : (
               <ActionForm action={decideLotAction.bind(null, lot.code)} label={`Decide lot ${lot.code}`}>
                 <input type="hidden" name="lotVersion" value={lot.version} />
-                {signals.length > 0 ? (
+                {first ? (
                   <Notice tone="question">
                     {signals.length === 1 ? 'One signal has' : `${signals.length} signals have`} to be
                     answered first,{' '}
-                    <Link
-                      href={`/drift?product=${encodeURIComponent(view.product.code)}#signal-${signals[0]?.id ?? ''}`}
-                    >
-                      in Drift
-                    </Link>
-                    , if the lot is to be released.
+                    <Link href={signalHref({ ...first, machineCode: first.machine?.code })}>in Drift</Link>,
+                    if the lot is to be released.
                   </Notice>
                 ) : null}
                 <ChoiceField
