@@ -215,10 +215,15 @@ export const countSetAside = (
   state: ImportRowFacts['state'],
 ): Promise<number> => tx.importRow.count({ where: { importId, kind, state } })
 
-export const findSetAside = async (tx: Tx, ids: readonly number[]): Promise<readonly ImportRowFacts[]> =>
+/** Rows of one import by their ids. */
+export const findSetAside = async (
+  tx: Tx,
+  importId: number,
+  ids: readonly number[],
+): Promise<readonly ImportRowFacts[]> =>
   (
     await tx.importRow.findMany({
-      where: { id: { in: [...ids] } },
+      where: { importId, id: { in: [...ids] } },
       select: rowSelect,
       orderBy: { row: 'asc' },
     })

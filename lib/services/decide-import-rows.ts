@@ -38,7 +38,11 @@ export async function decideImportRows(
   permit(actor, 'readings.supersede-any')
   const { read } = database()
   if (!(await findImport(read, importId))) throw problem('not-found', `There is no import ${importId}.`)
-  const rows = (await findSetAside(read, rowIds)).filter((row) => row.kind === 'differs')
+  const rows = (await findSetAside(read, importId, rowIds)).filter((row) => row.kind === 'differs')
+  if (rows.length < new Set(rowIds).size)
+    throw problem('not-found', 'Not all of these rows differ in this import.', {
+      mend: 'Load the page again and choose the rows anew.',
+    })
   let corrected = 0
   // A row a transaction: what is decided stays decided if a later one fails.
   for (const row of rows)

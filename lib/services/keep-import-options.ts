@@ -6,6 +6,7 @@ import { changeImport, findImport } from '@/lib/data/imports'
 import { appendLedger } from '@/lib/data/ledger'
 import { problem } from '@/lib/domain/errors'
 import { canonicalJson } from '@/lib/domain/record/canonical-json'
+import { nameOf } from '@/lib/input/bench-file/layout'
 import type { KeepImportOptionsInput } from '@/lib/input/import'
 import { changedMeanwhile } from './changed-meanwhile'
 
@@ -27,7 +28,10 @@ export async function keepImportOptions(
     if (mapping !== '' && !kept)
       throw problem('not-found', `No mapping is kept under the name ${mapping}.`, { where: 'mapping' })
     const columns = Object.fromEntries(
-      Object.entries(options.columns).map(([header, name]) => [header, kept?.columns[header] ?? name]),
+      Object.entries(options.columns).map(([header, name]) => [
+        header,
+        (kept && nameOf(kept.columns, header)) ?? name,
+      ]),
     )
     const changed = await changeImport(
       tx,

@@ -46,6 +46,11 @@ export async function receiveImport(
   const received = join(folder, `received-${process.pid}-${Math.random().toString(36).slice(2)}`)
   try {
     const { bytes, format, sha256 } = await receive(sent.body, received)
+    if (format === 'csv' && /\.xls[xm]?$/i.test(sent.fileName))
+      throw problem('bad-input', 'The file is named like a spreadsheet and holds none.', {
+        where: 'file',
+        mend: 'Save it as .xlsx again; if it is text, give it the ending .csv.',
+      })
     const path = importPath(dataDir, sha256)
     if (format === 'xlsx') {
       await convertSheet(received, `${received}.csv`)
@@ -89,8 +94,13 @@ async function receive(body: AsyncIterable<Uint8Array>, path: string) {
   let bytes = 0
   let format: 'csv' | 'xlsx' = 'csv'
   try {
+    let head = Buffer.alloc(0)
     for await (const piece of body) {
-      if (bytes === 0) format = formatOf(piece)
+      // A first piece may be a single byte.
+      if (head.length < 2) {
+        head = Buffer.concat([head, piece.subarray(0, 2)])
+        format = formatOf(head)
+      }
       bytes += piece.byteLength
       const most = format === 'xlsx' ? MOST_XLSX_BYTES : MOST_CSV_BYTES
       if (bytes > most)
@@ -134,7 +144,10 @@ async function proposedOptions(path: string): Promise<ImportOptions> {
   const mappings = await listMappings(database().read)
   // The mapping that knows most of these headers.
   const known = mappings
-    .map(({ columns }) => ({ columns, count: headers.filter((header) => header in columns).length }))
+    .map(({ columns }) => ({
+      columns,
+      count: headers.filter((header) => Object.hasOwn(columns, header)).length,
+    }))
     .sort((a, b) => b.count - a.count)[0]
   return {
     delimiter,

@@ -39,7 +39,8 @@ export async function saveRefusedRows(actor: Actor | undefined, id: number): Pro
       const cells = JSON.parse(row.cells) as readonly string[]
       const problems = JSON.parse(row.problems) as readonly Problem[]
       const kept = headers.flatMap((header, index) => (header === REASON ? [] : [cells[index] ?? '']))
-      parts.push(line([...kept, problems.map(sentence).join(' ')]))
+      // Cells beyond the last header stay beyond it: a row that was refused for having them keeps them.
+      parts.push(line([...kept, problems.map(sentence).join(' '), ...cells.slice(headers.length)]))
     }
     const last = rows.at(-1)
     if (!last) break

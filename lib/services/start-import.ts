@@ -7,7 +7,7 @@ import { changeImport, findImport } from '@/lib/data/imports'
 import { appendLedger } from '@/lib/data/ledger'
 import { problem } from '@/lib/domain/errors'
 import { canonicalJson } from '@/lib/domain/record/canonical-json'
-import { layoutOf } from '@/lib/input/bench-file/layout'
+import { layoutOf, nameOf } from '@/lib/input/bench-file/layout'
 import type { StartImportInput } from '@/lib/input/import'
 import { changedMeanwhile } from './changed-meanwhile'
 import { headersOf } from './import/file-rows'
@@ -34,7 +34,9 @@ export async function startImport(
   if (!layout.ok) throw refusal(layout.problems)
   const kept = {
     ...options,
-    columns: Object.fromEntries(headers.map((header) => [header, options.columns[header] ?? 'as-note'])),
+    columns: Object.fromEntries(
+      headers.map((header) => [header, nameOf(options.columns, header) ?? 'as-note']),
+    ),
   }
   await database().write(async (tx) => {
     const changed = await changeImport(

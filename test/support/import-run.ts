@@ -1,5 +1,6 @@
 import { mkdirSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
+import { afterAll, beforeAll } from 'vitest'
 import type { Actor } from '@/lib/access/actor'
 import { openBulk } from '@/lib/data/bulk/open-bulk'
 import { database } from '@/lib/data/database'
@@ -10,7 +11,12 @@ import type { Problem } from '@/lib/domain/errors'
 import { canonicalJson } from '@/lib/domain/record/canonical-json'
 import { CsvRecords, delimiterOf } from '@/lib/input/bench-file/csv-records'
 import { cleanHeaders, decimalOf, proposedColumns } from '@/lib/input/bench-file/layout'
+import { getImport, type ImportView } from '@/lib/services/get-import'
 import { type ImportRun, runImport } from '@/lib/services/import/run-import'
+import { sheetToCsv } from '@/lib/services/import/sheet-to-csv'
+import { type Workplace, workThrough } from '@/lib/services/import/work-through'
+import { receiveImport } from '@/lib/services/receive-import'
+import { startImport } from '@/lib/services/start-import'
 
 export interface ImportedText {
   readonly facts: ImportFacts
@@ -97,4 +103,71 @@ export async function setAsideOf(importId: number) {
     const problems = JSON.parse(one.problems) as readonly Problem[]
     return { ...one, problems, first: problems[0]?.message ?? '', where: problems.map(({ where }) => where) }
   })
+}
+
+/** What the server's import thread offers, in this process: for tests of the services without a server. */
+export function withImportThread(): void {
+  const key = Symbol.for('ledgerline.import-worker')
+  const place = globalThis as typeof globalThis & { [key]?: unknown }
+  beforeAll(() => {
+    place[key] = { nudge: () => {}, progress: new Map(), convert: sheetToCsv }
+  })
+  afterAll(() => {
+    place[key] = undefined
+  })
+}
+
+/** Sends a file as the page does, in pieces. */
+export async function sendFile(
+  actor: Actor,
+  content: string | Buffer,
+  fileName = 'bench.csv',
+): Promise<ImportView> {
+  const bytes = typeof content === 'string' ? Buffer.from(content) : content
+  async function* pieces() {
+    for (let at = 0; at < bytes.length; at += 65_536) yield bytes.subarray(at, at + 65_536)
+  }
+  const { id } = await receiveImport(actor, { fileName, body: pieces() })
+  return getImport(actor, id)
+}
+
+/** Begins it as it was proposed, with these columns changed. */
+export async function begin(
+  actor: Actor,
+  { id, preview, version }: ImportView,
+  { columns = {}, keepAs = '' }: { columns?: Readonly<Record<string, string>>; keepAs?: string } = {},
+): Promise<void> {
+  if (!preview) throw new Error('it was begun before')
+  const options = { ...preview.options, columns: { ...preview.options.columns, ...columns } }
+  await startImport(actor, id, { options, version, keepAs })
+}
+
+/** Works through everything that waits, as the thread does. */
+export async function workAll(change: Partial<Workplace> = {}): Promise<void> {
+  const connection = await openBulk(requireEnvironment())
+  try {
+    const place: Workplace = {
+      connection,
+      read: database().read,
+      dataDir: requireEnvironment().dataDir,
+      stopAsked: () => false,
+      progress: () => {},
+      ...change,
+    }
+    while (await workThrough(place));
+  } finally {
+    await connection.close()
+  }
+}
+
+/** Sends, begins as proposed, and works through. */
+export async function importFile(
+  actor: Actor,
+  content: string | Buffer,
+  fileName?: string,
+): Promise<ImportView> {
+  const view = await sendFile(actor, content, fileName)
+  await begin(actor, view)
+  await workAll()
+  return getImport(actor, view.id)
 }

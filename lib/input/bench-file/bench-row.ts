@@ -202,7 +202,7 @@ function partOf(
   return defined({
     takenAt,
     diameters: [...diameters].sort((a, b) => a.position - b.position || (a.direction < b.direction ? -1 : 1)),
-    weighedState: state && /^marked$/i.test(state.text) ? ('marked' as const) : undefined,
+    weighedState: state && (/^marked$/i.test(state.text) ? ('marked' as const) : ('slack' as const)),
     cutLength: one('cut_length', metres),
     cutMass: one('cut_mass', kilograms),
     load: loadReading,

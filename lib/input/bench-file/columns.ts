@@ -82,8 +82,9 @@ const unitOf = (dimensions: readonly string[], suffix: string): UnitId | undefin
     'fraction',
   ] as const) {
     if (!dimensions.includes(dimension)) continue
-    const unit = findUnit(dimension, spelled[suffix] ?? suffix)
-    if (unit !== undefined && (suffix in spelled || plainSuffixes.has(suffix))) return unit
+    const known = Object.hasOwn(spelled, suffix)
+    const unit = findUnit(dimension, known ? (spelled[suffix] ?? suffix) : suffix)
+    if (unit !== undefined && (known || plainSuffixes.has(suffix))) return unit
   }
   return undefined
 }
@@ -121,7 +122,7 @@ export function benchColumn(name: string): BenchColumn | undefined {
   return unit && { kind: 'value', base, unit }
 }
 
-const isBase = (text: string): text is ValueBase => text in bases
+const isBase = (text: string): text is ValueBase => Object.hasOwn(bases, text)
 
 /** Names to offer when a foreign column is mapped: every word column, every value with its usual units. */
 export function offeredNames(positions: number): readonly string[] {

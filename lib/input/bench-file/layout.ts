@@ -15,6 +15,13 @@ export type ImportOptions = z.output<typeof importOptionsSchema>
 
 export const delimiters = { ',': 'comma', ';': 'semicolon', '\t': 'tab' } as const
 
+/** Most columns that a file may have: a plan of many positions has some dozens. */
+const MOST_COLUMNS = 200
+
+/** What a header is read as; headers are names that somebody else chose, and may be called `constructor`. */
+export const nameOf = (columns: ImportOptions['columns'], header: string): string | undefined =>
+  Object.hasOwn(columns, header) ? columns[header] : undefined
+
 /** Headers as they stand, a byte-order mark taken off, empty ones at the end left out. */
 export function cleanHeaders(cells: readonly string[]): readonly string[] {
   const headers = cells.map((cell, index) => (index === 0 ? cell.replace(/^\uFEFF/, '') : cell).trim())
@@ -34,7 +41,7 @@ export const proposedColumns = (
   const proposals = headers.map((header): readonly [string, string] => {
     const own = header.toLowerCase()
     const found =
-      benchColumn(own) && own !== 'as-note' ? own : (kept[header] ?? likelyName(header) ?? 'as-note')
+      benchColumn(own) && own !== 'as-note' ? own : (nameOf(kept, header) ?? likelyName(header) ?? 'as-note')
     const name = isRepeatable(found) || !taken.has(found) ? found : 'as-note'
     taken.add(name)
     return [header, name]
@@ -63,11 +70,18 @@ export function layoutOf(
   columns: ImportOptions['columns'],
 ): Result<readonly BenchColumn[]> {
   const problems: Problem[] = []
+  if (headers.length > MOST_COLUMNS)
+    return refused(
+      sentence(
+        `The first line has ${headers.length} cells, and ${MOST_COLUMNS} columns is the most.`,
+        'Check that the first line holds the names of the columns, and what stands between cells.',
+      ),
+    )
   const twice = headers.find((header, index) => header !== '' && headers.indexOf(header) !== index)
   if (twice !== undefined)
     problems.push(sentence(`The file has two columns named “${twice}”.`, 'Name each column once.', twice))
   const found = headers.map((header): BenchColumn => {
-    const name = columns[header] ?? 'as-note'
+    const name = nameOf(columns, header) ?? 'as-note'
     const column = benchColumn(name)
     if (!column)
       problems.push(

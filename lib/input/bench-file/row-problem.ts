@@ -1,4 +1,5 @@
 import type { Problem } from '@/lib/domain/errors'
+import type { BenchColumn } from './columns'
 
 /** Most of a cell that is shown in a sentence. */
 const SHOWN = 60
@@ -14,6 +15,26 @@ export const problemOf = (where: string, value: string, message: string, mend: s
   mend,
   details: { value: shown(value) },
 })
+
+/**
+ * Problems that name a column of the bench file, told by the header it has in this file and with the cell as it
+ * stands there.
+ */
+export const placedIn = (
+  problems: readonly Problem[],
+  cells: readonly string[],
+  headers: readonly string[],
+  columns: readonly BenchColumn[],
+): readonly Problem[] =>
+  problems.map((one) => {
+    const index = columns.findIndex(
+      (column) => column.kind === 'word' && column.id === (one.where === 'weight' ? 'weights' : one.where),
+    )
+    const header = headers[index]
+    return header === undefined
+      ? one
+      : { ...one, where: header, details: { value: shown((cells[index] ?? '').trim()), ...one.details } }
+  })
 
 /** A cell as it may stand in a sentence. */
 export const shown = (value: string): string => {

@@ -2,7 +2,7 @@ import type { Problem } from '@/lib/domain/errors'
 import { ok, type Result, refused } from '@/lib/domain/result'
 
 const pattern =
-  /^(\d{4})-(\d{2})-(\d{2})(?:[T ](\d{2}):(\d{2})(?::(\d{2})(?:[.,](\d{1,3})\d*)?)?(Z|[+-]\d{2}:?\d{2})?)?$/i
+  /^(\d{4})-(\d{2})-(\d{2})(?:[T ](\d{2}):(\d{2})(?::(\d{2})(?:[.,](\d{1,3})\d*)?)?(Z|[+-](?:0\d|1[0-4]):?[0-5]\d)?)?$/i
 
 /** Years that a works' ledger can hold. */
 const EARLIEST = 1900

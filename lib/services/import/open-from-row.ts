@@ -52,18 +52,11 @@ export async function openFromRow(
     )
   if (madeAt > at + FUTURE_SLACK)
     problems.push(fault('made_at', 'A lot can’t be made in the future.', 'Check the date.'))
-  const find = <Row>(names: Names<Row>, where: 'machine' | 'die' | 'coil' | 'spool' | 'maker') => {
-    const text = opening[where]
-    if (text === undefined) return undefined
-    const found = names.find(text)
-    if (!found) problems.push(fault(where, `There is no ${where} “${text}”.`, mends[where]))
-    return found
-  }
-  const machine = find(lookups.machines, 'machine')
-  const die = find(lookups.dies, 'die')
-  const maker = find(lookups.people, 'maker')
-  const coil = find(lookups.materials, 'coil')
-  const spool = find(lookups.materials, 'spool')
+  const machine = named(opening, 'machine', lookups.machines, problems)
+  const die = named(opening, 'die', lookups.dies, problems)
+  const maker = named(opening, 'maker', lookups.people, problems)
+  const coil = named(opening, 'coil', lookups.materials, problems)
+  const spool = named(opening, 'spool', lookups.materials, problems)
   const revision = product && (await revisionOf(product, opening, madeAt, lookups, problems))
   if (problems.length > 0 || !product || !revision) return refused(...problems)
   const makerId = maker?.id ?? personId
@@ -156,7 +149,7 @@ async function revisionOf(
 /** What a row says of a lot that is there already must be true. */
 export function contradictions(
   { opening }: BenchRow,
-  lot: Pick<LotRow, 'code' | 'madeAt' | 'product'>,
+  lot: Pick<LotRow, 'code' | 'die' | 'machine' | 'madeAt' | 'product'>,
   lookups: ImportLookups,
 ): readonly Problem[] {
   const problems: Problem[] = []
@@ -177,5 +170,37 @@ export function contradictions(
         'Correct the time, or leave it empty: a lot keeps the time it was opened with.',
       ),
     )
+  for (const [where, names] of [
+    ['machine', lookups.machines],
+    ['die', lookups.dies],
+  ] as const) {
+    const found = named(opening, where, names, problems)
+    const stored = lot[where]
+    if (found && stored && found.id !== stored.id)
+      problems.push(
+        fault(
+          where,
+          `Lot ${lot.code} was made with ${stored.code}, the row says “${opening[where]}”.`,
+          `Correct the ${where}, or leave it empty: a lot keeps what it was opened with.`,
+        ),
+      )
+  }
+  named(opening, 'maker', lookups.people, problems)
+  named(opening, 'coil', lookups.materials, problems)
+  named(opening, 'spool', lookups.materials, problems)
   return problems
+}
+
+/** What a row names, where it names something; a name that nothing has is a problem. */
+function named<Row>(
+  opening: LotOpening,
+  where: keyof typeof mends,
+  names: Names<Row>,
+  problems: Problem[],
+): Row | undefined {
+  const text = opening[where]
+  if (text === undefined) return undefined
+  const found = names.find(text)
+  if (!found) problems.push(fault(where, `There is no ${where} “${text}”.`, mends[where]))
+  return found
 }

@@ -13,6 +13,7 @@ import { canonicalJson } from '@/lib/domain/record/canonical-json'
 import { readBenchRow } from '@/lib/input/bench-file/bench-row'
 import type { BenchColumn } from '@/lib/input/bench-file/columns'
 import { type ImportOptions, layoutOf } from '@/lib/input/bench-file/layout'
+import { placedIn } from '@/lib/input/bench-file/row-problem'
 import { BatchPlanner, type Importer, type PlannedBatch, type ReadRow, type SetAside } from './batch-planner'
 import { type FileRow, readFileRows } from './file-rows'
 
@@ -139,6 +140,11 @@ class RowReader {
     this.columns = layout.value
   }
 
+  /** A row set aside, its problems told by the headers of this file. */
+  placed(row: SetAside): SetAside {
+    return { ...row, problems: placedIn(row.problems, row.cells, this.headers, this.columns) }
+  }
+
   read(record: FileRow): ReadRow | SetAside {
     const { line, row } = record
     if ('broken' in record)
@@ -202,7 +208,10 @@ async function storeRows(
       if (!held) await run.connection.begin()
       const head = await bulkLedgerHead(run.connection, true)
       if (head.count === planned.ledgerCount) {
-        const count = await storePlanned(facts, { batch, bad, planned, at, head }, run)
+        const aside = [...bad, ...planned.setAside]
+          .map((one) => reader.placed(one))
+          .sort((a, b) => a.row - b.row)
+        const count = await storePlanned(facts, { batch, aside, planned, at, head }, run)
         await run.connection.commit()
         planner.stored(count)
         return
@@ -222,7 +231,7 @@ async function storeRows(
 
 interface Storing {
   readonly batch: readonly FileRow[]
-  readonly bad: readonly SetAside[]
+  readonly aside: readonly SetAside[]
   readonly planned: PlannedBatch
   readonly at: number
   readonly head: Awaited<ReturnType<typeof bulkLedgerHead>>
@@ -231,10 +240,9 @@ interface Storing {
 /** Lots, rows set aside, counters, position and ledger entry of a batch. @returns the ledger's new count */
 async function storePlanned(
   { id, sha256: file }: ImportFacts,
-  { at, bad, batch, head, planned }: Storing,
+  { aside, at, batch, head, planned }: Storing,
   { connection, importer, read }: ImportRun,
 ): Promise<number> {
-  const aside = [...bad, ...planned.setAside].sort((a, b) => a.row - b.row)
   if (planned.lots.length > 0) await storeBatch(connection, planned.lots, await loadEquipment(read))
   await connection.insert(
     bulkTables.importRow,

@@ -1,7 +1,7 @@
 import { join } from 'node:path'
 import type { Role } from '@/lib/access/actor'
 import { may } from '@/lib/access/permit'
-import type { BulkConnection } from '@/lib/data/bulk/bulk-connection'
+import type { BulkConnection, BulkValue } from '@/lib/data/bulk/bulk-connection'
 import { appendBulkLedger, bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
 import type { Tx } from '@/lib/data/database'
 import { type ImportFacts, nextImport } from '@/lib/data/imports'
@@ -40,11 +40,11 @@ export async function workThrough(place: Workplace): Promise<boolean> {
   const next = await nextImport(place.read)
   if (!next) return false
   try {
-    await begin(next, place)
-    await run(next, place)
+    if (await begin(next, place)) await run(next, place)
   } catch (error) {
-    if (!(error instanceof LedgerlineError)) console.error(error)
-    await fail(next, sentenceOf(error), place)
+    const known = sentenceOf(error)
+    if (known === undefined) console.error(error)
+    await fail(next, known ?? UNFORESEEN, place)
   }
   return true
 }
@@ -75,33 +75,54 @@ async function run(next: ImportFacts, { connection, dataDir, progress, read, sto
   })
 }
 
-/** Counts the rows of the file, once, and marks the import as under way. */
-async function begin(next: ImportFacts, { connection, dataDir }: Workplace): Promise<void> {
-  const { delimiter } = JSON.parse(next.options) as ImportOptions
-  let rowCount = next.rowCount
-  if (rowCount === undefined) {
-    rowCount = 0
-    for await (const record of readFileRows(importPath(dataDir, next.sha256), delimiter))
-      if ('row' in record) rowCount = record.row
-  }
-  await connection.begin()
-  await connection.run(
-    'UPDATE "Import" SET "state" = ?, "rowCount" = ?, "startedAt" = ? WHERE "id" = ? AND "state" IN (\'queued\', \'running\')',
+/**
+ * Marks the import as under way and counts the rows of its file, once.
+ * @returns whether it goes on: not when somebody put it away meanwhile, nor when the server is told to stop
+ */
+async function begin(next: ImportFacts, { connection, dataDir, stopAsked }: Workplace): Promise<boolean> {
+  const underWay = await changed(
+    connection,
+    'UPDATE "Import" SET "state" = ?, "startedAt" = ? WHERE "id" = ? AND "state" IN (\'queued\', \'running\')',
     'running',
-    rowCount,
     connection.instant(next.startedAt ?? Date.now()),
     next.id,
   )
-  await connection.commit()
+  if (!underWay || next.rowCount !== undefined) return underWay
+  const { delimiter } = JSON.parse(next.options) as ImportOptions
+  let rowCount = 0
+  for await (const record of readFileRows(importPath(dataDir, next.sha256), delimiter)) {
+    if ('row' in record) rowCount = record.row
+    if (rowCount % 1000 === 0 && stopAsked()) return false
+  }
+  return changed(connection, 'UPDATE "Import" SET "rowCount" = ? WHERE "id" = ?', rowCount, next.id)
 }
 
-/** What a person reads when a run can't go on. */
-function sentenceOf(error: unknown): string {
+async function changed(
+  connection: BulkConnection,
+  sql: string,
+  ...parameters: readonly BulkValue[]
+): Promise<boolean> {
+  await connection.begin()
+  try {
+    const count = await connection.run(sql, ...parameters)
+    await connection.commit()
+    return count > 0
+  } catch (error) {
+    await connection.rollback()
+    throw error
+  }
+}
+
+const UNFORESEEN =
+  'Something unforeseen happened; the server’s log says more. What is imported so far is kept.'
+
+/** What a person reads when a run can't go on; undefined when nobody has foreseen why. */
+function sentenceOf(error: unknown): string | undefined {
   if (error instanceof LedgerlineError) return `${error.problem.message} ${error.problem.mend ?? ''}`.trim()
   const code = (error as { readonly code?: unknown } | null)?.code
   if (code === 'ENOENT') return 'The file is no longer in the data folder. Send it again.'
   if (code === 'SQLITE_FULL' || code === 'ENOSPC') return 'The disk is full. What is imported so far is kept.'
-  return 'Something unforeseen happened; the server’s log says more. What is imported so far is kept.'
+  return undefined
 }
 
 async function fail(next: ImportFacts, message: string, { connection }: Workplace): Promise<void> {

@@ -50,5 +50,18 @@ async function workForEver(): Promise<void> {
 
 const task = workerData as SheetTask | { readonly task: 'imports' } | null
 
-if (task?.task === 'sheet') parentPort?.postMessage(await sheetToCsv(task.from, task.to))
+/** Most memory outside the heap that unpacking may take, bytes. */
+const MOST_UNPACKED = 900_000_000
+
+/** What a file unpacks to is what it says only if it is honest: a thread that grows beyond it is ended. */
+async function convert({ from, to }: SheetTask): Promise<void> {
+  const guard = setInterval(() => {
+    if (process.memoryUsage().arrayBuffers > MOST_UNPACKED) process.exit(1)
+  }, 50)
+  const outcome = await sheetToCsv(from, to)
+  clearInterval(guard)
+  parentPort?.postMessage(outcome)
+}
+
+if (task?.task === 'sheet') await convert(task)
 else if (task?.task === 'imports') await workForEver()
