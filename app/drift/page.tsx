@@ -6,18 +6,17 @@ import { EmptyState } from '@/app/_ui/shell/EmptyState'
 import { PageHead } from '@/app/_ui/shell/PageHead'
 import type { Actor } from '@/lib/access/actor'
 import { may } from '@/lib/access/permit'
-import type { StaffChartInput } from '@/lib/domain/charts/staff-chart'
 import { chartId, parseOrder, parseStaves } from '@/lib/input/drift-view'
 import { getDrift } from '@/lib/services/get-drift'
 import { getMachineDrift } from '@/lib/services/get-machine-drift'
 import { getWorks } from '@/lib/services/get-works'
 import { type DriftMachine, listDriftMachines } from '@/lib/services/list-drift-machines'
 import { listDriftProducts } from '@/lib/services/list-drift-products'
+import type { SignalView } from '@/lib/services/signal-views'
+import { ChartAndSignals } from './_ui/ChartAndSignals'
 import { ChartLists } from './_ui/ChartLists'
-import { DriftChart } from './_ui/DriftChart'
-import { type DriftSubject, driftAddress, driftHref, stavesParameter } from './_ui/drift-address'
+import { type DriftSubject, driftHref, stavesParameter } from './_ui/drift-address'
 import { LimitSets } from './_ui/LimitSets'
-import { SignalList } from './_ui/SignalList'
 import { StaveChoice } from './_ui/StaveChoice'
 import '@/app/_ui/charts/charts.css'
 import './drift.css'
@@ -192,70 +191,8 @@ async function productPage(actor: Actor, code: string, query: Query) {
   )
 }
 
-type Signals = Awaited<ReturnType<typeof getDrift>>['signals']
-
 /** The newest of what is unanswered, over the chart. */
-function Loudest({ signals }: { readonly signals: Signals }) {
+function Loudest({ signals }: { readonly signals: readonly SignalView[] }) {
   const loudest = signals.find((signal) => signal.state === 'open')
   return loudest ? <p className="drift-headline">{loudest.sentence}</p> : null
-}
-
-interface ChartAndSignalsProps {
-  readonly actor: Actor
-  readonly subject: DriftSubject
-  readonly chart: StaffChartInput
-  readonly query: Query
-  readonly signals: Signals
-  readonly timeZone: string
-  /** Under the chart. */
-  readonly children: ReactNode
-}
-
-function ChartAndSignals({
-  actor,
-  chart,
-  children,
-  query,
-  signals,
-  subject,
-  timeZone,
-}: ChartAndSignalsProps) {
-  const charts = parseStaves(query.staves)
-  const order = parseOrder(query.order)
-  const staves = stavesParameter(charts)
-  return (
-    <div className="columns drift-columns">
-      <div>
-        {/* Another chart, other staves, another order start anew. */}
-        <DriftChart
-          key={`${subject.kind} ${subject.code} ${staves} ${order} ${query.lot ?? ''}`}
-          subject={subject}
-          input={withWindow(chart, query.from, query.to)}
-          staves={staves}
-          order={order}
-          lot={query.lot}
-        />
-        {children}
-      </div>
-      <aside>
-        <SignalList
-          signals={signals}
-          timeZone={timeZone}
-          mayAnswer={may(actor, 'signals.answer')}
-          onChart={(lot) => driftAddress(subject, { staves, order, lot })}
-        />
-      </aside>
-    </div>
-  )
-}
-
-/** Lots named in the address, where there are such lots. */
-function withWindow(
-  chart: StaffChartInput,
-  from: string | undefined,
-  to: string | undefined,
-): StaffChartInput {
-  const placeOf = (code: string | undefined): number => chart.lots.findIndex((lot) => lot.code === code)
-  const window = { from: placeOf(from), to: placeOf(to) }
-  return window.from >= 0 && window.to >= window.from ? { ...chart, window } : chart
 }
