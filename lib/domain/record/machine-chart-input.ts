@@ -88,7 +88,10 @@ function staveOf(chart: MachineDriftChart, lots: readonly DriftLot[]): StaveInpu
         ]
       : [],
     signals: [
-      ...chart.signals.filter(({ rule }) => rule === 'beyond-the-limits').flatMap(drawn),
+      // A run of one product weaves through the lots of the others: it is drawn while somebody has to look at it.
+      ...chart.signals
+        .filter(({ rule, state }) => rule === 'beyond-the-limits' || state === 'open')
+        .flatMap(drawn),
       ...chart.machineSignals.flatMap(drawn),
     ],
   }

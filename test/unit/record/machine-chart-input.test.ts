@@ -79,20 +79,22 @@ describe('machineChartInput(facts)', () => {
     expect(staveOf([lot(1, 2, 2e-4)], chart({ limitSets: [] })).limitSets).toEqual([])
   })
 
-  it('shows lots beyond their limits and the machine’s runs, but not the runs of one product', () => {
+  it('shows lots beyond their limits, the machine’s runs, and runs of one product while they are open', () => {
     const signal = { id: 1, side: 'above', state: 'open', sentence: '', members: [1, 99] } as const
     const stave = staveOf(
       [lot(1, 2, 2e-4), lot(2, 3, 3e-4)],
       chart({
         signals: [
           { ...signal, rule: 'beyond-the-limits' },
-          { ...signal, id: 2, rule: 'nine-on-one-side' },
+          { ...signal, id: 2, rule: 'nine-on-one-side', state: 'answered' },
+          { ...signal, id: 4, rule: 'nine-on-one-side' },
         ],
         machineSignals: [{ ...signal, id: 3, rule: 'nine-on-one-side', members: [2, 1] }],
       }),
     )
     expect(stave.signals.map(({ id, members }) => [id, members])).toEqual([
       [1, [0]],
+      [4, [0]],
       [3, [0, 1]],
     ])
   })
