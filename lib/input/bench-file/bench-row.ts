@@ -137,6 +137,8 @@ const rulesOf = {
   humidity: { name: 'Humidity', dimension: 'fraction', min: 0, max: 1 },
 } as const satisfies Record<Exclude<ValueBase, 'load'>, ValueRules>
 
+const noteSchema = paragraphs('note', { max: 2000 })
+
 const asNumber = (value: number): number => value
 
 function readValue(
@@ -182,8 +184,7 @@ function partOf(
     )
   const takenAt = takenAtOf(words.taken_at, problems)
   const note = [...(words.note ? [words.note.text.replaceAll('\r\n', '\n')] : []), ...notes].join('\n')
-  const kept =
-    note === '' ? undefined : paragraphs('note', { max: 2000 }).safeParse(note.replaceAll('\r', '\n'))
+  const kept = note === '' ? undefined : noteSchema.safeParse(note.replaceAll('\r', '\n'))
   if (kept && !kept.success)
     problems.push(
       problemOf(

@@ -9,15 +9,33 @@ import { parseTime } from './wall-time'
 const gaugeColumns = ['rig', 'micrometer', 'balance', 'rule', 'counter'] as const
 const openingCodes = ['product', 'machine', 'die', 'coil', 'spool'] as const
 
+/** Made once: a file asks them a million times. */
+const schemas = {
+  lot: codeText('lot'),
+  product: plainText('product', { max: 80 }),
+  machine: codeText('machine'),
+  die: codeText('die'),
+  coil: codeText('coil'),
+  spool: codeText('spool'),
+  maker: plainText('maker', { max: 80 }),
+  measurer: plainText('measurer', { max: 80 }),
+  rig: codeText('rig'),
+  micrometer: codeText('micrometer'),
+  balance: codeText('balance'),
+  rule: codeText('rule'),
+  counter: codeText('counter'),
+  weight: codeText('Weight'),
+} as const
+
 /** Word cells of a row with the headers they stand under. */
 export type Words = Partial<Record<WordColumn, { readonly text: string; readonly header: string }>>
 
 /** The words of a row, checked one by one; problems are added to the list. */
 export function readWords(words: Words, timeZone: string, problems: Problem[]) {
-  const checked = (id: WordColumn, schema: ReturnType<typeof codeText>): string | undefined => {
+  const checked = (id: Exclude<keyof typeof schemas, 'weight'>): string | undefined => {
     const word = words[id]
     if (!word) return undefined
-    const parsed = schema.safeParse(word.text)
+    const parsed = schemas[id].safeParse(word.text)
     if (parsed.success) return parsed.data
     problems.push({
       code: 'bad-input',
@@ -54,23 +72,23 @@ export function readWords(words: Words, timeZone: string, problems: Problem[]) {
   }
   const codes = Object.fromEntries(
     openingCodes.flatMap((id) => {
-      const code = checked(id, id === 'product' ? plainText('product', { max: 80 }) : codeText(id))
+      const code = checked(id)
       return code === undefined ? [] : [[id, code]]
     }),
   )
   const equipment: EquipmentCodes = Object.fromEntries(
     gaugeColumns.flatMap((id) => {
-      const code = checked(id, codeText(id))
+      const code = checked(id)
       return code === undefined ? [] : [[id, code]]
     }),
   )
-  const maker = checked('maker', plainText('maker', { max: 80 }))
+  const maker = checked('maker')
   const madeAt = time('made_at')
   const specification = whole('specification', 9999)
   const measuredAt = time('measured_at')
-  const measurer = checked('measurer', plainText('measurer', { max: 80 }))
+  const measurer = checked('measurer')
   const weights = words.weights?.text.split(/[\s,;+]+/).filter((code) => code !== '')
-  const badWeight = weights?.find((code) => !codeText('Weight').safeParse(code).success)
+  const badWeight = weights?.find((code) => !schemas.weight.safeParse(code).success)
   if (badWeight !== undefined && words.weights)
     problems.push(
       problemOf(
@@ -91,7 +109,7 @@ export function readWords(words: Words, timeZone: string, problems: Problem[]) {
       ),
     )
   return {
-    lot: checked('lot', codeText('lot')),
+    lot: checked('lot'),
     specimen: whole('specimen', 9999),
     opening: {
       ...codes,

@@ -54,6 +54,7 @@ function textOf(cell: unknown): string {
 /** A number without an exponent, with all the digits that it was typed with. */
 function plainNumber(value: number): string {
   const text = String(value)
+  if (Math.abs(value) >= 1e21) return BigInt(value).toString()
   return text.includes('e') ? value.toFixed(20).replace(/\.?0+$/, '') : text
 }
 
