@@ -127,11 +127,13 @@ test('settings that can’t be served end with a sentence, not with a trace', as
   rmSync(folder, { recursive: true })
 })
 
-test('a works of its own is not overwritten by --demo', async () => {
+test('a works of its own is not overwritten by --demo', async ({ browser }) => {
   const server = await startServer({ template: 'works', args: ['--demo'] })
   expect(server.output()).toContain('A works is set up here already; the demo was not loaded.')
-  // The secret is made when the first session is asked for.
-  await fetch(`${server.address}/today`, { redirect: 'manual' })
+  // The secret is made when the first person signs in.
+  const page = await (await browser.newContext({ baseURL: server.address })).newPage()
+  await signIn(page, 'falk')
+  await page.context().close()
   expect(await server.stop()).toBe(0)
   const secret = readdirSync(server.dataDir).filter((name) => /secret/.test(name))
   expect(secret.map((name) => statSync(join(server.dataDir, name)).mode & 0o777)).toEqual([0o600])
