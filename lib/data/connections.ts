@@ -131,7 +131,7 @@ const sqliteFactory = (path: string, role: ConnectionRole): SqlDriverAdapterFact
         await adapter.dispose()
         throw error
       }
-      return takeTurns(adapter, busyPatience[role])
+      return takeTurns(adapter, busyPatience[role], role !== 'reader')
     },
   }
 }

@@ -5,7 +5,7 @@
  * acknowledged, then gone when that one rolls back. It begins deferred transactions, which fail at once when
  * they read first and another connection wrote in between; stays inside a transaction whose COMMIT found the
  * file busy, so that later writes vanish with it; and never hands the turn on when BEGIN fails. Here statements
- * and transactions take turns, BEGIN is IMMEDIATE, what did not commit is rolled back for certain, and the turn
+ * and transactions take turns, BEGIN is IMMEDIATE for whoever writes, what did not commit is rolled back for certain, and the turn
  * is always handed on.
  */
 import { setTimeout as pause } from 'node:timers/promises'
@@ -19,8 +19,10 @@ const pauseMilliseconds = 15
  * Wraps an adapter of one connection.
  * @param busyPatience milliseconds to try again, without stopping the server, while another connection holds the
  * file. Only what has done nothing yet is tried again: a statement outside a transaction, or BEGIN.
+ * @param writes whether its transactions write. One that only reads may not ask for the right to: the client opens
+ * a transaction for a reading of several queries, too.
  */
-export const takeTurns = (adapter: SqlDriverAdapter, busyPatience = 0): SqlDriverAdapter => {
+export const takeTurns = (adapter: SqlDriverAdapter, busyPatience = 0, writes = true): SqlDriverAdapter => {
   const turns = createTurns()
   const run = (sql: string) => adapter.executeRaw({ sql, args: [], argTypes: [] })
   const rollBackIfOpen = () => run('ROLLBACK').catch(() => undefined)
@@ -42,7 +44,7 @@ export const takeTurns = (adapter: SqlDriverAdapter, busyPatience = 0): SqlDrive
       throw new Error(`SQLite has no isolation level ${isolationLevel}`)
     const handOn = await turns.take()
     try {
-      await whileBusy(() => run('BEGIN IMMEDIATE'))
+      await whileBusy(() => run(writes ? 'BEGIN IMMEDIATE' : 'BEGIN'))
     } catch (error) {
       handOn()
       throw error
