@@ -34,7 +34,7 @@ export function ChartLists({ machines, products, timeZone }: Props) {
                 ),
               },
               { head: 'Lots', number: true, cell: (machine) => machine.lots },
-              { head: 'Newest', cell: (machine) => day(machine.lastMadeAt) },
+              { head: 'Newest', wideOnly: true, cell: (machine) => day(machine.lastMadeAt) },
               { head: 'Open signals', number: true, cell: (machine) => waiting(machine.openSignals) },
             ]}
           />
@@ -52,11 +52,16 @@ export function ChartLists({ machines, products, timeZone }: Props) {
               head: 'Product',
               cell: (product) => <Link href={driftHref(product.code)}>{product.name}</Link>,
             },
-            { head: 'Family', cell: (product) => product.family || '–' },
+            { head: 'Family', wideOnly: true, cell: (product) => product.family || '–' },
             { head: 'Lots', number: true, cell: (product) => product.lots },
-            { head: 'Newest', cell: (product) => day(product.lastMadeAt) },
+            { head: 'Newest', wideOnly: true, cell: (product) => day(product.lastMadeAt) },
             { head: 'Open signals', number: true, cell: (product) => waiting(product.openSignals) },
-            { head: 'Limit sets in force', number: true, cell: (product) => product.limitSets || '–' },
+            {
+              head: 'Limit sets in force',
+              number: true,
+              wideOnly: true,
+              cell: (product) => product.limitSets || '–',
+            },
           ]}
         />
       </section>

@@ -79,8 +79,6 @@ export default roomPage(async (actor, { query }) => {
               was found, never because it lies far off.
             </p>
           </div>
-        </div>
-        <div className="fields">
           <div className="field">
             <label htmlFor="limits-alike">Neighbouring lots are alike by nature</label>
             <select id="limits-alike" name="alike" className="input" defaultValue={query.alike ?? ''}>
