@@ -10,6 +10,7 @@ const words: Readonly<Record<string, string>> = {
   'supersede-reading': 'Corrected',
   'change-materials': 'Made of',
   'import-rows': 'From a file',
+  'answer-signal': 'Signal answered',
 }
 
 const verbOf = (entry: HistoryEntry): string => {
@@ -44,6 +45,7 @@ function textOf({ body, verb }: HistoryEntry): string {
       .join(', ')
   if (verb === 'change-materials')
     return `${codesOf(body.after) || 'nothing named'}, before that ${codesOf(body.before) || 'nothing'}: “${text('reason')}”`
+  if (verb === 'answer-signal') return [text('cause'), text('answer')].filter(Boolean).join(': ')
   if (verb.startsWith('decide-')) return `“${text('reason')}”`
   if (text('reason')) return `“${text('reason')}”`
   const { specimens } = body
