@@ -33,6 +33,10 @@ export interface DemoProduct {
   readonly modulus: number
   readonly expansion?: number
   readonly variation: Variation
+  /** How it takes up water with the season: share of mass, and of that how much the diameter swells. */
+  readonly season?: { readonly share: number; readonly swells: number }
+  /** Which luck its lots have; 0 when not said. */
+  readonly stream?: number
   readonly specification: SpecificationBody
   /** A later revision, in force from a lot on. */
   readonly revised?: {

@@ -38,7 +38,7 @@ function shownDiameter(si: number, code: string): TypedValue<ReturnType<typeof m
  * others give works of the same kind with other luck.
  */
 export function readLot(product: DemoProduct, lot: DemoSchedule, seed = 0): readonly SpecimenSheet[] {
-  const random = randomOf(lot, seed)
+  const random = randomOf(product, lot, seed)
   const truth = trueLot(product, lot, random, seed)
   return product.specification.plan.takenAt.map((end, index) =>
     readSpecimen({ product, lot, truth, end, number: index + 1 }, random),

@@ -42,9 +42,13 @@ export interface DemoStory {
   /** Size with its unit: metres, kilograms, or a share of the characteristic. */
   readonly amount: number
   readonly unit: 'm' | 'm a lot' | 'kg' | 'share' | 'times'
-  /** Where it shows. */
+  /** Where it shows first. */
   readonly characteristic: CharacteristicId
   readonly statistic: 'mean' | 'within-lot-sd'
+  /** All that it moves, or might be thought to: of a decoy none of them is to raise a signal. */
+  readonly touches: readonly CharacteristicId[]
+  /** To which side a fault moves it. */
+  readonly side?: 'above' | 'below'
   /**
    * Within how many of its own lots it should have been found (the first is 1); undefined for decoys, of which
    * nothing is to be found.
@@ -57,9 +61,18 @@ export interface DemoStory {
 interface Told
   extends Omit<
     DemoStory,
-    'products' | 'machine' | 'lots' | 'firstLot' | 'lastLot' | 'firstDay' | 'lastDay' | 'statistic'
+    | 'products'
+    | 'machine'
+    | 'lots'
+    | 'firstLot'
+    | 'lastLot'
+    | 'firstDay'
+    | 'lastDay'
+    | 'statistic'
+    | 'touches'
   > {
   readonly statistic?: DemoStory['statistic']
+  readonly touches?: DemoStory['touches']
   readonly has: (lot: DemoSchedule) => boolean
 }
 
@@ -82,6 +95,7 @@ const told: readonly Told[] = [
     amount: WORN_DIE.perLot,
     unit: 'm a lot',
     characteristic: 'diameter',
+    side: 'above',
     foundWithin: 24,
     foundBy: 'charts',
   },
@@ -93,6 +107,7 @@ const told: readonly Told[] = [
     amount: WIDE_DIE.wider,
     unit: 'm',
     characteristic: 'massPerMetreWeighed',
+    side: 'above',
     foundWithin: 9,
     foundBy: 'charts',
   },
@@ -104,6 +119,7 @@ const told: readonly Told[] = [
     amount: ZERO_WEEK.error,
     unit: 'm',
     characteristic: 'effectiveDensity',
+    side: 'below',
     foundWithin: 6,
     foundBy: 'charts',
   },
@@ -115,6 +131,7 @@ const told: readonly Told[] = [
     amount: WRONG_ALLOY.share,
     unit: 'share',
     characteristic: 'massPerMetreWeighed',
+    side: 'below',
     foundWithin: 3,
     foundBy: 'charts',
   },
@@ -126,6 +143,7 @@ const told: readonly Told[] = [
     amount: HARD_TWIN.share,
     unit: 'share',
     characteristic: 'massPerMetreWeighed',
+    side: 'below',
     foundWithin: 24,
     foundBy: 'charts',
   },
@@ -146,7 +164,7 @@ const told: readonly Told[] = [
     kind: 'fault',
     sentence: 'Two digits of a frequency changed places, and were kept when the entry check asked.',
     has: isOne(SWAPPED_DIGITS),
-    amount: -0.0069,
+    amount: -0.007,
     unit: 'share',
     characteristic: 'closure',
     foundWithin: 1,
@@ -184,6 +202,7 @@ const told: readonly Told[] = [
     amount: UNEVEN_WINDER.times,
     unit: 'times',
     characteristic: 'massPerMetreWeighed',
+    side: 'above',
     statistic: 'within-lot-sd',
     foundWithin: 12,
     foundBy: 'charts',
@@ -196,6 +215,7 @@ const told: readonly Told[] = [
     amount: NYLON_SEASON.share,
     unit: 'share',
     characteristic: 'massPerMetreWeighed',
+    touches: ['massPerMetreWeighed', 'diameter', 'effectiveDensity'],
   },
   {
     key: 'moved-target',
@@ -205,6 +225,7 @@ const told: readonly Told[] = [
     amount: MOVED_TARGET.diameter,
     unit: 'm',
     characteristic: 'diameter',
+    touches: ['diameter', 'massPerMetreWeighed', 'effectiveDensity'],
   },
   {
     key: 'changed-die',
@@ -214,6 +235,7 @@ const told: readonly Told[] = [
     amount: 0,
     unit: 'm',
     characteristic: 'diameter',
+    touches: ['diameter', 'massPerMetreWeighed'],
   },
   {
     key: 'late-lot',
@@ -223,6 +245,7 @@ const told: readonly Told[] = [
     amount: 0,
     unit: 'share',
     characteristic: 'massPerMetreWeighed',
+    touches: ['diameter', 'massPerMetreWeighed', 'closure', 'effectiveDensity'],
   },
   {
     key: 'coarse-micrometer',
@@ -233,24 +256,28 @@ const told: readonly Told[] = [
     amount: 0,
     unit: 'm',
     characteristic: 'diameter',
+    touches: ['diameter', 'effectiveDensity'],
   },
 ]
 
 /** All that is buried, with the lots that it touches. */
-export const demoStories: readonly DemoStory[] = told.map(({ has, statistic = 'mean', ...story }) => {
-  const lots = demoSchedule().filter(has)
-  const [first, last] = [lots[0], lots.at(-1)]
-  if (!first || !last) throw new Error(`No lot of the demo has the story ${story.key}.`)
-  const codes = new Set(lots.map((lot) => lot.productCode))
-  return {
-    ...story,
-    statistic,
-    products: demoProducts.flatMap(({ code }) => (codes.has(code) ? [code] : [])),
-    machine: first.machine,
-    lots: lots.map((lot) => lot.code),
-    firstLot: first.code,
-    lastLot: last.code,
-    firstDay: first.day,
-    lastDay: last.day,
-  }
-})
+export const demoStories: readonly DemoStory[] = told.map(
+  ({ has, statistic = 'mean', touches, ...story }) => {
+    const lots = demoSchedule().filter(has)
+    const [first, last] = [lots[0], lots.at(-1)]
+    if (!first || !last) throw new Error(`No lot of the demo has the story ${story.key}.`)
+    const codes = new Set(lots.map((lot) => lot.productCode))
+    return {
+      ...story,
+      statistic,
+      touches: touches ?? [story.characteristic],
+      products: demoProducts.flatMap(({ code }) => (codes.has(code) ? [code] : [])),
+      machine: first.machine,
+      lots: lots.map((lot) => lot.code),
+      firstLot: first.code,
+      lastLot: last.code,
+      firstDay: first.day,
+      lastDay: last.day,
+    }
+  },
+)

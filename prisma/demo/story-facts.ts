@@ -29,7 +29,7 @@ export const inZeroWeek = (day: number): boolean =>
   day >= ZERO_WEEK.from && day < ZERO_WEEK.from + ZERO_WEEK.days
 
 /** A wrap spool of brass with 20 % zinc (8670 kg/m³) sold as bronze (8860): 84.4 % of the mass is wrap. */
-export const WRONG_ALLOY = { productCode: 'ROWAN-1060', from: 39, lots: 6, share: -0.0181 } as const
+export const WRONG_ALLOY = { productCode: 'ROWAN-1060', from: 44, lots: 6, share: -0.0181 } as const
 
 /** A heat drawn too hard, on all spools of the bronze winder for 36 days: its turns lie a little apart. */
 export const HARD_TWIN = { machine: 'BW-1', heat: '7731', from: 165, days: 36, share: -0.0057 } as const

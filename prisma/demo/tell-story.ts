@@ -7,7 +7,7 @@ import { decideLot } from '@/lib/services/decide-lot'
 import { freezeLimits } from '@/lib/services/freeze-limits'
 import { listSignals } from '@/lib/services/list-signals'
 import { type LoadedLot, loadLot } from '@/lib/services/lot-assessment'
-import { defaultCharts } from './default-charts'
+import { areAlike, defaultCharts } from './default-charts'
 import { CONCESSION } from './papers'
 import { productOf } from './products'
 import type { DemoSchedule } from './schedule'
@@ -16,18 +16,22 @@ import { answerOf, hasSwappedDigits, lacksSlot, noCause } from './story-answers'
 const HOUR = 3_600_000
 
 async function freezeFirstLimits(quality: Actor, lot: DemoSchedule, at: number): Promise<void> {
-  for (const chart of defaultCharts)
+  for (const chart of defaultCharts) {
+    const alike = chart.statistic === 'mean' && areAlike(productOf(lot.productCode), chart.characteristic)
+    const why = alike ? ' Neighbouring lots of nylon are alike by nature, and follow the season.' : ''
     await freezeLimits(
       quality,
       {
         productCode: lot.productCode,
         ...chart,
         leftOut: [],
-        reason: `First limits, from the first ${lot.index + 1} lots.`,
+        ...(alike ? { alike } : {}),
+        reason: `First limits, from the first ${lot.index + 1} lots.${why}`,
         supersedes: 0,
       },
       at,
     )
+  }
   // Signals among the baseline's own lots, and on the machine's chart that they now stand on, are looked into
   // before the first lot is judged by the limits.
   const signals = (await listSignals(quality)).filter(
@@ -90,23 +94,44 @@ async function look(
   return { assessment, signals, version: row.version }
 }
 
+/** Answers those of these signals that are open. @returns how many they were */
+async function answerOpen(
+  quality: Actor,
+  lot: DemoSchedule,
+  signals: LoadedLot['signals'],
+  at: number,
+): Promise<number> {
+  const open = signals.filter((one) => one.state === 'open')
+  for (const signal of open)
+    await answerSignal(quality, signal.id, { ...answerOf(signal, lot), version: signal.version }, at)
+  return open.length
+}
+
+/** Of a lot that nobody has looked into yet: only what the rig does to all its lots is answered for it, too. */
+export async function answerClosure(quality: Actor, lot: DemoSchedule): Promise<void> {
+  const { signals } = await look(lot.code)
+  const own = signals.filter(({ characteristic }) => characteristic === 'closure')
+  await answerOpen(quality, lot, own, lot.measuredAt + 2.5 * HOUR)
+}
+
 /**
  * What quality does a few hours after a lot is measured: answers the signals that it belongs to, releases what
  * is proposed for release, scraps what is outside, holds the rest; freezes first limits when there are enough lots.
+ * @returns what was decided
  */
-export async function decideAsQualityWould(quality: Actor, lot: DemoSchedule): Promise<void> {
+export async function decideAsQualityWould(quality: Actor, lot: DemoSchedule): Promise<DispositionVerb> {
   const at = lot.measuredAt + 3 * HOUR
   if (lot.index + 1 === productOf(lot.productCode).baseline) await freezeFirstLimits(quality, lot, at - HOUR)
   let seen = await look(lot.code)
-  const open = seen.signals.filter((one) => one.state === 'open')
-  for (const signal of open)
-    await answerSignal(
-      quality,
-      signal.id,
-      { ...answerOf(signal, lot), version: signal.version },
-      at - HOUR / 2,
-    )
-  if (open.length > 0) seen = await look(lot.code)
+  if ((await answerOpen(quality, lot, seen.signals, at - HOUR / 2)) > 0) seen = await look(lot.code)
   const { answers, reason, verb } = decisionOn(lot, seen)
   await decideLot(quality, lot.code, { verb, reason, lotVersion: seen.version, answers: [...answers] }, at)
+  return verb
+}
+
+/** What becomes of a lot that stayed on hold for a week: nobody measured more of it, so it goes as another grade. */
+export async function settleHeld(quality: Actor, { code }: DemoSchedule, at: number): Promise<void> {
+  const { version } = await look(code)
+  const reason = 'A week on hold and still not proven: sold as seconds, with the tension that was measured.'
+  await decideLot(quality, code, { verb: 'regrade', reason, lotVersion: version, answers: [] }, at)
 }

@@ -7,7 +7,6 @@ import {
   inHardTwin,
   inZeroWeek,
   MISSING_SLOT,
-  NYLON_SEASON,
   UNCOUNTED_HOOK,
   UNEVEN_WINDER,
   WIDE_DIE,
@@ -38,10 +37,10 @@ export interface TrueLot {
 const YEAR = 365.25 * 86_400_000
 
 /** Nylon is heaviest in a humid August. */
-const season = (madeAt: number): number => Math.sin((2 * Math.PI * (madeAt - Date.UTC(2026, 4, 15))) / YEAR)
+const dampness = (madeAt: number): number => Math.sin((2 * Math.PI * (madeAt - Date.UTC(2026, 4, 15))) / YEAR)
 
 /** Share by which what is wound or extruded is heavier or lighter than its diameter says. */
-function massStory({ family }: DemoProduct, lot: DemoSchedule): number {
+function massStory({ season }: DemoProduct, lot: DemoSchedule): number {
   const brass =
     lot.productCode === WRONG_ALLOY.productCode &&
     lot.index >= WRONG_ALLOY.from &&
@@ -49,25 +48,24 @@ function massStory({ family }: DemoProduct, lot: DemoSchedule): number {
   return (
     (brass ? WRONG_ALLOY.share : 0) +
     (inHardTwin(lot.machine, lot.day) ? HARD_TWIN.share : 0) +
-    (family === NYLON_SEASON.family ? NYLON_SEASON.share * season(lot.madeAt) : 0)
+    (season ? season.share * dampness(lot.madeAt) : 0)
   )
 }
 
 /** Metres by which a die, or water, makes the string thicker than drawn at random. */
-function diameterStory({ family, specification }: DemoProduct, lot: DemoSchedule): number {
+function diameterStory({ season, specification }: DemoProduct, lot: DemoSchedule): number {
   const worn = lot.dieCode === WORN_DIE.code ? (lot.index - WORN_DIE.from + 1) * WORN_DIE.perLot : 0
   const wide = lot.dieCode === WIDE_DIE.code ? WIDE_DIE.wider : 0
-  const swollen =
-    family === NYLON_SEASON.family
-      ? NYLON_SEASON.swells * NYLON_SEASON.share * season(lot.madeAt) * specification.diameter.target
-      : 0
+  const swollen = season
+    ? season.swells * season.share * dampness(lot.madeAt) * specification.diameter.target
+    : 0
   return worn + wide + swollen
 }
 
 /** Departures that follow each other: x_i = r x_(i−1) + √(1 − r²) z, from the first lot on. */
 function followed(product: DemoProduct, index: number, seed: number): number {
   const { follows } = product.variation
-  const random = seededRandom(product.micrometres * 31 + 17 + seed * SEED_STEP)
+  const random = seededRandom(product.micrometres * 31 + 17 + luckOf(product, seed))
   let value = random.normal(2.5)
   for (let lot = 0; lot < index; lot += 1)
     value = follows * value + Math.sqrt(1 - follows * follows) * random.normal(2.5)
@@ -75,10 +73,13 @@ function followed(product: DemoProduct, index: number, seed: number): number {
 }
 
 /** Seeds of one lot stay apart from those of the others, whatever the seed of the whole. */
-export const SEED_STEP = 15_485_863
+const SEED_STEP = 15_485_863
+const STREAM_STEP = 32_452_843
 
-export const randomOf = (lot: DemoSchedule, seed: number): Random =>
-  seededRandom(lot.micrometres * 1000 + lot.index + seed * SEED_STEP)
+const luckOf = ({ stream = 0 }: DemoProduct, seed: number): number => seed * SEED_STEP + stream * STREAM_STEP
+
+export const randomOf = (product: DemoProduct, lot: DemoSchedule, seed: number): Random =>
+  seededRandom(lot.micrometres * 1000 + lot.index + luckOf(product, seed))
 
 function hangingMass(product: DemoProduct, lot: DemoSchedule): number {
   const missing = lot.rig === MISSING_SLOT.rig && lot.day === MISSING_SLOT.day ? MISSING_SLOT.mass : 0
@@ -99,7 +100,7 @@ export function trueLot(product: DemoProduct, lot: DemoSchedule, random: Random,
   const mass = variation.mass * random.normal(2)
   const [least, most] = variation.ovality
   // Swelling makes the string thicker and heavier by its own laws; a die makes it heavier as it makes it thicker.
-  const swollen = product.family === NYLON_SEASON.family ? diameterStory(product, lot) : 0
+  const swollen = product.season ? diameterStory(product, lot) : 0
   const grown = (diameter - swollen) / target.diameter.target
   return {
     diameter,

@@ -1,4 +1,5 @@
 import { proposeLimits } from '@/lib/domain/control/propose-limits'
+import type { Side } from '@/lib/domain/control/rule-point'
 import type { CharacteristicId } from '@/lib/domain/metrology/characteristics'
 import { evaluateSpecimen } from '@/lib/domain/metrology/evaluate-specimen'
 import type { EvaluationContext, GaugeFacts, SpecimenEvaluation } from '@/lib/domain/metrology/evaluation'
@@ -13,13 +14,14 @@ import type { MaterialBody } from '@/lib/domain/strings/material'
 import { handbookMaterials } from '@/lib/domain/strings/materials-table'
 import { localGravity, NORMAL_GRAVITY_RELATIVE_U } from '@/lib/domain/strings/normal-gravity'
 import { alderNylon } from '@/prisma/demo/alder'
-import { defaultCharts } from '@/prisma/demo/default-charts'
+import { areAlike, defaultCharts } from '@/prisma/demo/default-charts'
 import { demoGauges, demoWeights, demoWorks, rigOf } from '@/prisma/demo/equipment'
 import { type DemoProduct, specificationFor } from '@/prisma/demo/product'
 import { productOf } from '@/prisma/demo/products'
 import { readLot } from '@/prisma/demo/readings'
 import { type DemoSchedule, demoSchedule } from '@/prisma/demo/schedule'
 import type { DemoStory } from '@/prisma/demo/stories'
+import { withoutStory } from './demo-switches'
 
 export interface SimulatedLot {
   readonly lot: DemoSchedule
@@ -69,16 +71,21 @@ export function demoContext(product: DemoProduct, lot: DemoSchedule): Evaluation
 
 /**
  * The demo works without a database: generator → `evaluateSpecimen` → summaries, lot by lot in the order in
- * which they were made. Seed 0 is the demo itself; others give works of the same kind with other luck.
+ * which they were made. Seed 0 is the demo itself; others give works of the same kind with other luck. With the
+ * key of a decoy it is left out of the works, everything else being alike.
  */
-export const simulateDemo = (
+export function simulateDemo(
   seed = 0,
   wanted: (lot: DemoSchedule) => boolean = () => true,
-): readonly SimulatedLot[] =>
-  demoSchedule()
+  without?: string,
+): readonly SimulatedLot[] {
+  const off = without === undefined ? undefined : withoutStory(without)
+  return demoSchedule()
     .filter(wanted)
-    .map((lot) => {
-      const product = productOf(lot.productCode)
+    .map((made) => {
+      const lot = off?.lot(made) ?? made
+      const known = productOf(lot.productCode)
+      const product = off?.product(known) ?? known
       const context = demoContext(product, lot)
       const evaluations = readLot(product, lot, seed).map((sheet) => evaluateSpecimen(sheet, context))
       const summaries = summariseSpecimens(
@@ -86,12 +93,14 @@ export const simulateDemo = (
       )
       return { lot, product, evaluations, summaries }
     })
+}
 
 /** What the default charts find on simulated lots, as the rules would raise it in the works. */
 export interface FoundSignal {
   readonly characteristic: CharacteristicId
   readonly statistic: 'mean' | 'within-lot-sd'
   readonly rule: string
+  readonly side: Side
   /** The lot that completed the pattern. */
   readonly lot: string
   readonly members: readonly string[]
@@ -131,6 +140,7 @@ export function demoSignals(lots: readonly SimulatedLot[]): readonly FoundSignal
           .map(({ code, lotId, value }) => ({ lotId, code, value, n: 5, leftOut: false })),
         statistic,
         false,
+        areAlike(product, characteristic) ? true : undefined,
       )
       if (!proposal.ok) throw new Error(proposal.problems[0]?.message)
       const { centre, lower, rules, sigma, upper } = proposal.value
@@ -156,6 +166,7 @@ export function demoSignals(lots: readonly SimulatedLot[]): readonly FoundSignal
         characteristic,
         statistic,
         rule: signal.rule,
+        side: signal.side,
         lot: codeOf(signal.lotId),
         members: signal.members.map(codeOf),
         machine,
@@ -167,11 +178,22 @@ export function demoSignals(lots: readonly SimulatedLot[]): readonly FoundSignal
   })
 }
 
+/** Signals of a story’s charts that one of its own lots completes: of a fault on the side to which it moves. */
+export function signalsOf(story: DemoStory, signals: readonly FoundSignal[]): readonly FoundSignal[] {
+  const own = new Set(story.lots)
+  return signals.filter(
+    ({ characteristic, lot, side, statistic }) =>
+      statistic === story.statistic &&
+      story.touches.includes(characteristic) &&
+      own.has(lot) &&
+      (story.side === undefined || side === story.side),
+  )
+}
+
 /** The first of a story’s own lots (from 1) at which its chart raises a signal; undefined when none does. */
 export function foundAt(story: DemoStory, signals: readonly FoundSignal[]): number | undefined {
-  const places = signals
-    .filter((one) => one.characteristic === story.characteristic && one.statistic === story.statistic)
+  const places = signalsOf(story, signals)
+    .filter(({ characteristic }) => characteristic === story.characteristic)
     .map(({ lot }) => story.lots.indexOf(lot) + 1)
-    .filter((place) => place > 0)
   return places.length > 0 ? Math.min(...places) : undefined
 }

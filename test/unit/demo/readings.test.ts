@@ -179,7 +179,9 @@ describe('what is buried in the demo', () => {
     const one = lots.find(({ lot }) => storyLots('swapped-digits').has(lot.code))
     if (!one) throw new Error('no lot')
     const [kept] = readLot(one.product, one.lot).flatMap((sheet) => sheet.keptDoubts)
-    expect(kept).toMatchObject({ question: 'Were two digits swapped in 253.52?' })
+    expect(kept).toMatchObject({
+      question: expect.stringMatching(/^Were two digits swapped in 25\d\.\d\d\?$/),
+    })
     const { closure } = one.evaluations[1]?.results ?? {}
     expect(normalisedError(closure?.value ?? 0, closure?.u ?? 1)).toBeLessThan(-3)
   })

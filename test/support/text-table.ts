@@ -1,0 +1,14 @@
+/** Rows as text in columns, for proofs that print what they found. */
+export function textTable(rows: readonly (readonly string[])[]): string {
+  const widths = (rows[0] ?? []).map((_, column) =>
+    Math.max(...rows.map((row) => [...(row[column] ?? '')].length)),
+  )
+  return rows
+    .map((row) =>
+      row
+        .map((cell, column) => cell.padEnd(widths[column] ?? 0))
+        .join('  ')
+        .trimEnd(),
+    )
+    .join('\n')
+}
