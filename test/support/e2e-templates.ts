@@ -1,4 +1,4 @@
-/** Before the end-to-end tests: data folders to copy, one with a migrated, empty database, one with a small works. */
+/** Before the end-to-end tests: data folders to copy, one with a migrated, empty database, two with a small works. */
 import { execFileSync } from 'node:child_process'
 import { cpSync, existsSync, mkdirSync, rmSync } from 'node:fs'
 import { join } from 'node:path'
@@ -7,7 +7,7 @@ import { fileURLToPath } from 'node:url'
 const root = fileURLToPath(new URL('../..', import.meta.url))
 const folder = join(root, 'build/e2e')
 
-export type Template = 'empty' | 'works'
+export type Template = 'empty' | 'works' | 'alloy'
 export const templatePath = (name: Template): string => join(folder, name)
 
 const run = (name: Template, ...args: readonly string[]): void => {
@@ -24,6 +24,8 @@ export default function makeTemplates(): void {
   rmSync(folder, { recursive: true, force: true })
   mkdirSync(templatePath('empty'), { recursive: true, mode: 0o700 })
   run('empty', 'scripts/migrate.mjs')
-  cpSync(templatePath('empty'), templatePath('works'), { recursive: true })
-  run('works', '--import', 'tsx', 'test/support/e2e-works.ts')
+  for (const name of ['works', 'alloy'] as const) {
+    cpSync(templatePath('empty'), templatePath(name), { recursive: true })
+    run(name, '--import', 'tsx', `test/support/e2e-${name}.ts`)
+  }
 }
