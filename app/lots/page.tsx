@@ -39,11 +39,18 @@ export default roomPage(async (actor, { query }) => {
         title="Lots"
         under={all ? undefined : 'Released ones only: what a datasheet may rest on.'}
         actions={
-          may(actor, 'lots.open') ? (
-            <Link className="button primary" href="/bench">
-              Open a lot
-            </Link>
-          ) : undefined
+          <>
+            {may(actor, 'imports.read') ? (
+              <Link className="button" href="/lots/import">
+                Import
+              </Link>
+            ) : null}
+            {may(actor, 'lots.open') ? (
+              <Link className="button primary" href="/bench">
+                Open a lot
+              </Link>
+            ) : null}
+          </>
         }
       />
       {problems.length > 0 ? (

@@ -88,20 +88,20 @@ export default roomPage(async (actor, { params }) => {
 })
 
 function Figures({ view }: { readonly view: ImportView }) {
-  const figures: readonly (readonly [string, number])[] = [
+  const figures: readonly (readonly [string, number, string?])[] = [
     ['rows dealt with', view.rowsDone],
     ['specimens stored', view.stored],
     ['lots opened', view.lotsOpened],
     ['already there', view.alreadyThere],
-    ['different from what is stored', view.differing],
-    ['refused', view.refused],
+    ['different from what is stored', view.differing, 'brass'],
+    ['refused', view.refused, 'vermilion'],
   ]
   return (
     <dl className="import-figures">
-      {figures.map(([name, count]) => (
+      {figures.map(([name, count, tone]) => (
         <div key={name} data-none={count === 0 || undefined}>
           <dt>{name}</dt>
-          <dd>{count}</dd>
+          <dd className={count > 0 ? tone : undefined}>{count}</dd>
         </div>
       ))}
     </dl>

@@ -1,3 +1,5 @@
+import { Fragment } from 'react'
+import { nameOf } from '@/lib/input/bench-file/layout'
 import type { ImportPreview } from '@/lib/services/get-import'
 
 /** The first rows as they stand in the file, each column under what it is read as; refused cells say why. */
@@ -12,33 +14,40 @@ export function PreviewTable({ preview }: { readonly preview: ImportPreview }) {
         <thead>
           <tr>
             <th scope="col">Line</th>
-            {headers.map((header) => (
-              <th scope="col" key={header}>
+            {headers.map((header, index) => (
+              // biome-ignore lint/suspicious/noArrayIndexKey: columns have their places, and may share a name
+              <th scope="col" key={index}>
                 {header}
-                <span className="unit">{shownName(options.columns[header])}</span>
+                <span className="import-read-as">{readAs(header, nameOf(options.columns, header))}</span>
               </th>
             ))}
           </tr>
         </thead>
         <tbody>
           {rows.map(({ cells, line, problems }) => (
-            <tr key={line}>
-              <th scope="row">
-                {line}
-                {problems.length > 0 ? (
-                  <span className="import-why vermilion">
-                    {problems
-                      .map(({ message, where }) => (where ? `${where}: ${message}` : message))
-                      .join(' ')}
-                  </span>
-                ) : null}
-              </th>
-              {headers.map((header, index) => (
-                <td key={header} data-refused={problems.some(({ where }) => where === header) || undefined}>
-                  {cells[index] ?? ''}
-                </td>
-              ))}
-            </tr>
+            <Fragment key={line}>
+              <tr data-refused={problems.length > 0 || undefined}>
+                <th scope="row">{line}</th>
+                {headers.map((header, index) => (
+                  // biome-ignore lint/suspicious/noArrayIndexKey: columns have their places, and may share a name
+                  <td key={index} data-refused={problems.some(({ where }) => where === header) || undefined}>
+                    {cells[index] ?? ''}
+                  </td>
+                ))}
+              </tr>
+              {problems.length > 0 ? (
+                <tr className="import-why">
+                  <td colSpan={headers.length + 1}>
+                    <p>
+                      {problems
+                        .map(({ mend, message, where }) => [where && `${where}:`, message, mend])
+                        .map((parts) => parts.filter(Boolean).join(' '))
+                        .join(' ')}
+                    </p>
+                  </td>
+                </tr>
+              ) : null}
+            </Fragment>
           ))}
         </tbody>
       </table>
@@ -46,5 +55,12 @@ export function PreviewTable({ preview }: { readonly preview: ImportPreview }) {
   )
 }
 
-const shownName = (name: string | undefined): string =>
-  name === undefined || name === 'as-note' ? 'note' : name === 'leave-out' ? 'left out' : name
+/** What a column is read as, where that is not its own name. */
+const readAs = (header: string, name: string | undefined): string =>
+  name === undefined || name === 'as-note'
+    ? 'note'
+    : name === 'leave-out'
+      ? 'left out'
+      : name === header.toLowerCase()
+        ? ''
+        : name

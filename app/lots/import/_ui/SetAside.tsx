@@ -11,6 +11,25 @@ import { decideRowsAction } from '../actions'
 const valueOfRow = (row: SetAsideRow): string =>
   row.problems.map(({ details }) => String(details?.value ?? '')).find((value) => value !== '') ?? '–'
 
+const fieldWords: Readonly<Record<string, string>> = {
+  cutMass: 'cut mass',
+  cutLength: 'cut length',
+  weighedState: 'weighed',
+}
+
+/** Both values of each reading that differs: "d1a: 0.2540 mm stored, 0.2552 mm in the file". */
+const differencesOf = (row: SetAsideRow): string =>
+  row.problems
+    .flatMap(({ details = {} }) =>
+      Object.entries(details).flatMap(([key, stored]) => {
+        const field = /^(.+)\.stored$/.exec(key)?.[1]
+        if (field === undefined) return []
+        const word = fieldWords[field] ?? field
+        return [`${word}: ${stored} stored, ${details[`${field}.entered`]} in the file`]
+      }),
+    )
+    .join('; ')
+
 /** Rows that could not be taken: where, what, how to mend; and all of them as a file. */
 export function RefusedRows({ view }: { readonly view: ImportView }) {
   if (view.refused === 0) return null
@@ -64,7 +83,7 @@ export function DifferingRows({ view }: { readonly view: ImportView }) {
             choices={open.map((row) => ({
               value: String(row.id),
               label: `line ${row.line}: specimen ${row.specimen ?? '?'} of ${row.lotCode}`,
-              note: row.problems.map(({ message }) => message).join(' '),
+              note: differencesOf(row),
             }))}
           />
           {view.mayChoose ? (
