@@ -65,7 +65,7 @@ export async function recordSpecimens(
         const lot = await getLotRow(tx, lotId)
         // What leaves the shelf rests on its readings: only those who may correct it may add to it.
         if (isFinal(lot.state)) permit(actor, 'readings.supersede-any')
-        const { state, equipment } = await loadWriteState(tx, lot)
+        const { state, equipment } = await loadWriteState(tx, lot, input.entries.length)
         const entries = input.entries.map((entry) => entryOf(entry, at))
         checkEquipment(equipment, entries)
         const planned = planSpecimenWrite(state, entries, actor, at, sha256)

@@ -9,27 +9,23 @@ import type { LotWriteState } from '@/lib/domain/record/write-state'
 import { loadFacts } from './evaluation-facts'
 
 /**
- * Everything that the plan of a further entry rests on. Call it with the lot's row locked; the product's row is
- * locked here, because two lots of one product may raise the same signal, and its machine's for the same reason.
+ * Everything that the plan of further entries rests on, at most `toCome` of them. Call it with the lot's row locked;
+ * the product's row is locked here, because two lots of one product may raise the same signal, and its machine's for
+ * the same reason.
  */
 export async function loadWriteState(
   tx: Tx,
   lot: LotRow,
+  toCome = Number.POSITIVE_INFINITY,
 ): Promise<{ readonly state: LotWriteState; readonly equipment: KnownEquipment }> {
   await lockRow(tx, 'Product', lot.product.id)
   if (lot.machine) await lockRow(tx, 'Machine', lot.machine.id)
-  return readWriteState(tx, lot)
-}
-
-/** The same without locks: for whoever makes sure in another way that nothing changes meanwhile. */
-export async function readWriteState(
-  tx: Tx,
-  lot: LotRow,
-): Promise<{ readonly state: LotWriteState; readonly equipment: KnownEquipment }> {
   const equipment = await loadEquipment(tx)
   const { facts } = await loadFacts(tx, lot.specificationRevisionId, equipment)
   const specimens = await loadSpecimens(tx, lot.id, equipment)
-  const charts = await loadChartHistories(tx, lot.product.id)
+  // A lot whose plan stays incomplete comes onto no chart: there is nothing for the rules to find.
+  const staysOff = lot.state === 'measuring' && specimens.length + toCome < facts.specification.plan.specimens
+  const charts = staysOff ? [] : await loadChartHistories(tx, lot.product.id)
   const disposition = await findCurrentDisposition(tx, lot.id)
   return {
     equipment,
