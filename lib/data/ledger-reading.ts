@@ -25,10 +25,7 @@ export const listLedgerOf = async (tx: Tx, subject: string): Promise<readonly Le
  * The batches of imports that were stored at any of these instants: what a batch writes carries the batch's own
  * instant, which is how a lot or a reading is found again in the ledger.
  */
-export const listImportBatches = async (
-  tx: Tx,
-  instants: readonly number[],
-): Promise<readonly LedgerRow[]> =>
+export const listImportBatches = async (tx: Tx, instants: readonly number[]): Promise<readonly LedgerRow[]> =>
   (
     await tx.ledgerEntry.findMany({
       where: { at: { in: instants.map((at) => new Date(at)) }, verb: 'import-rows' },
