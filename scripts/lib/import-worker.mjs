@@ -40,19 +40,23 @@ export const startImportWorker = (root) => {
   let worker
   let stopping = false
   let pause = firstPause
+  let deaths = 0
   const launch = () => {
     worker = new Worker(join(root, 'build/workers/import.mjs'), {
-      workerData: { task: 'imports' },
+      // A file that ends the thread again and again is given up, so that the next one gets its turn.
+      workerData: { task: 'imports', deaths },
       resourceLimits: limits,
       env: process.env,
     })
     worker.on('message', (message) => {
       pause = firstPause
+      deaths = 0
       progress.set(message.importId, message)
     })
     worker.on('error', (error) => console.error('The import thread ended:', error.message))
     worker.on('exit', () => {
       if (stopping) return
+      deaths += 1
       setTimeout(launch, pause).unref()
       pause = Math.min(longestPause, 2 * pause)
     })

@@ -14,7 +14,7 @@ import { cleanHeaders, decimalOf, proposedColumns } from '@/lib/input/bench-file
 import { getImport, type ImportView } from '@/lib/services/get-import'
 import { type ImportRun, runImport } from '@/lib/services/import/run-import'
 import { sheetToCsv } from '@/lib/services/import/sheet-to-csv'
-import { type Workplace, workThrough } from '@/lib/services/import/work-through'
+import { giveUpRunning, type Workplace, workThrough } from '@/lib/services/import/work-through'
 import { receiveImport } from '@/lib/services/receive-import'
 import { startImport } from '@/lib/services/start-import'
 
@@ -143,7 +143,10 @@ export async function begin(
 }
 
 /** Works through everything that waits, as the thread does. */
-export async function workAll(change: Partial<Workplace> = {}): Promise<void> {
+export async function workAll({
+  once = false,
+  ...change
+}: Partial<Workplace> & { once?: boolean } = {}): Promise<void> {
   const connection = await openBulk(requireEnvironment())
   try {
     const place: Workplace = {
@@ -154,7 +157,17 @@ export async function workAll(change: Partial<Workplace> = {}): Promise<void> {
       progress: () => {},
       ...change,
     }
-    while (await workThrough(place));
+    while ((await workThrough(place)) && !once);
+  } finally {
+    await connection.close()
+  }
+}
+
+/** What a thread does first that has died several times. */
+export async function giveUp(): Promise<boolean> {
+  const connection = await openBulk(requireEnvironment())
+  try {
+    return await giveUpRunning({ connection, read: database().read })
   } finally {
     await connection.close()
   }

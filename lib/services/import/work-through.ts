@@ -49,6 +49,17 @@ export async function workThrough(place: Workplace): Promise<boolean> {
   return true
 }
 
+/**
+ * Gives up the import under way, where its thread has ended over and over without storing a row: others wait.
+ * @returns whether there was one
+ */
+export async function giveUpRunning(place: Pick<Workplace, 'connection' | 'read'>): Promise<boolean> {
+  const next = await nextImport(place.read)
+  if (next?.state !== 'running') return false
+  await fail(next, GIVEN_UP, place)
+  return true
+}
+
 async function run(next: ImportFacts, { connection, dataDir, progress, read, stopAsked }: Workplace) {
   const person = await getPerson(read, next.createdById)
   const works = await getWorks(read)
@@ -116,6 +127,9 @@ async function changed(
 const UNFORESEEN =
   'Something unforeseen happened; the server’s log says more. What is imported so far is kept.'
 
+const GIVEN_UP =
+  'The rows that come next ended the import’s thread several times. What is imported so far is kept. Divide the file, and send the rest again.'
+
 /** What a person reads when a run can't go on; undefined when nobody has foreseen why. */
 function sentenceOf(error: unknown): string | undefined {
   if (error instanceof LedgerlineError) return `${error.problem.message} ${error.problem.mend ?? ''}`.trim()
@@ -125,7 +139,11 @@ function sentenceOf(error: unknown): string | undefined {
   return undefined
 }
 
-async function fail(next: ImportFacts, message: string, { connection }: Workplace): Promise<void> {
+async function fail(
+  next: ImportFacts,
+  message: string,
+  { connection }: Pick<Workplace, 'connection'>,
+): Promise<void> {
   await connection.rollback()
   await connection.begin()
   const head = await bulkLedgerHead(connection, true)

@@ -7,7 +7,7 @@ import { openBulk } from '@/lib/data/bulk/open-bulk'
 import { database } from '@/lib/data/database'
 import { requireEnvironment } from '@/lib/data/env'
 import { sheetToCsv } from './sheet-to-csv'
-import { workThrough } from './work-through'
+import { giveUpRunning, workThrough } from './work-through'
 
 interface SheetTask {
   readonly task: 'sheet'
@@ -18,7 +18,10 @@ interface SheetTask {
 /** How long to wait before looking again when nobody has nudged. */
 const IDLE = 2_000
 
-async function workForEver(): Promise<void> {
+/** A thread that died so often without a batch in between gives up the import it was at. */
+const MOST_DEATHS = 3
+
+async function workForEver(deaths: number): Promise<void> {
   const environment = requireEnvironment()
   const state = { stopping: false, wake: () => {} }
   parentPort?.on('message', (message: unknown) => {
@@ -26,6 +29,7 @@ async function workForEver(): Promise<void> {
     state.wake()
   })
   const connection = await openBulk(environment)
+  if (deaths >= MOST_DEATHS) await giveUpRunning({ connection, read: database().read })
   while (!state.stopping) {
     const worked = await workThrough({
       connection,
@@ -48,7 +52,7 @@ async function workForEver(): Promise<void> {
   parentPort?.close()
 }
 
-const task = workerData as SheetTask | { readonly task: 'imports' } | null
+const task = workerData as SheetTask | { readonly task: 'imports'; readonly deaths: number } | null
 
 /** Most memory outside the heap that unpacking may take, bytes. */
 const MOST_UNPACKED = 900_000_000
@@ -64,4 +68,4 @@ async function convert({ from, to }: SheetTask): Promise<void> {
 }
 
 if (task?.task === 'sheet') await convert(task)
-else if (task?.task === 'imports') await workForEver()
+else if (task?.task === 'imports') await workForEver(task.deaths)

@@ -13,7 +13,15 @@ import { listImports } from '@/lib/services/list-imports'
 import { saveRefusedRows } from '@/lib/services/save-refused-rows'
 import { startImport } from '@/lib/services/start-import'
 import { csvOf, type FileCells, steelRow } from '../../support/bench-file'
-import { begin, importFile, sendFile, setAsideOf, withImportThread, workAll } from '../../support/import-run'
+import {
+  begin,
+  giveUp,
+  importFile,
+  sendFile,
+  setAsideOf,
+  withImportThread,
+  workAll,
+} from '../../support/import-run'
 import { refusalOf } from '../../support/refusal-of'
 import { seededUniform } from '../../support/seeded-random'
 import { day, type SteelWorks, setUpSteelWorks } from '../../support/steel-works'
@@ -475,6 +483,33 @@ describeOnEachEngine('who may, and when it ends', () => {
       stored: 0,
       rowsDone: 0,
     })
+  })
+
+  it('that ends its thread over and over is given up, what is in is kept, and the next one goes on', async () => {
+    const rows = Array.from({ length: 90 }, (_, n) => rowsOf(`LA-7${String(n).padStart(2, '0')}`)).flat()
+    const view = await sendFile(works.bench, csvOf(rows))
+    expect(await giveUp()).toBe(false)
+    await begin(works.bench, view)
+    let batches = 0
+    const stopAsked = () => {
+      batches += 1
+      return batches > 2
+    }
+    // A server that ends after two batches leaves it under way.
+    await workAll({ stopAsked, once: true })
+    expect(await getImport(works.bench, view.id)).toMatchObject({ state: 'running' })
+    const other = await sendFile(works.bench, csvOf(rowsOf('LA-470')))
+    await begin(works.bench, other)
+    expect(await giveUp()).toBe(true)
+    const { message, state, stored } = await getImport(works.bench, view.id)
+    expect({ state, message }).toMatchObject({ state: 'failed', message: expect.stringMatching(/kept/) })
+    await workAll()
+    expect(counts(await getImport(works.bench, other.id))).toEqual({ ...nothing, stored: 5, lotsOpened: 1 })
+    expect(counts(await importFile(works.bench, csvOf(rows)))).toMatchObject({
+      stored: 450 - stored,
+      alreadyThere: stored,
+    })
+    expect(await verdict()).toMatchObject({ sound: true })
   })
 
   it('whose file is gone fails with a sentence, and the next one goes on', async () => {
