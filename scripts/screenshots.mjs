@@ -1,6 +1,6 @@
 /**
  * `node scripts/screenshots.mjs`: makes the pictures of the README anew, from the demo works on the built app, into
- * public/pictures. Takes about two minutes; needs Chromium (`npm test` installs it).
+ * public/pictures. Takes about four minutes; needs Chromium (`npm test` installs it).
  */
 import { existsSync, mkdirSync, mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
@@ -22,6 +22,9 @@ const pictures = [
   { name: 'lot', path: '/lots/LC-059', username: 'orrin' },
   { name: 'release', path: '/lots/LC-059/release', username: 'orrin' },
   { name: 'drift', path: '/drift?product=LARCH-254&lot=LA-139', username: 'orrin', wait: '.staff-plot' },
+  { name: 'machine', path: '/drift?machine=BW-1', username: 'orrin', wait: '.staff-plot' },
+  { name: 'lots', path: '/lots', username: 'orrin' },
+  { name: 'import', path: '/lots/import', username: 'orrin', act: sendFile },
   { name: 'datasheet', path: '/datasheets/new?productCode=LARCH-254', username: 'pell' },
   {
     name: 'drift-dark',
@@ -31,6 +34,22 @@ const pictures = [
     dark: true,
   },
 ]
+
+/** A file with a foreign header and a wrong number, as its preview shows it. */
+async function sendFile(page) {
+  const rows = [
+    'lot;product;made_at;machine;specimen;D1A [mm];d1b_mm;cut_length_mm;cut_mass_mg;frequency_hz;colour',
+    'LA-901;Larch 254;2026-11-27T07:10;DM-1;1;0,2540;0,2541;500,0;198,92;330,54;bright',
+    'LA-901;Larch 254;2026-11-27T07:10;DM-1;2;0,2542;0,2541;500,0;199,11;330,41;bright',
+    'LA-901;Larch 254;2026-11-27T07:10;DM-1;3;thick;0,2540;500,0;198,97;330,49;dull',
+  ]
+  await page.locator('input[type=file]').setInputFiles({
+    name: 'november.csv',
+    mimeType: 'text/csv',
+    buffer: Buffer.from(rows.join('\r\n')),
+  })
+  await page.waitForURL(/\/lots\/import\/\d+/)
+}
 
 async function measure(page) {
   for (const typed of ['.2795', '.2791', '.2794', '.2789', '.2792', '.2790', '.2796', '.2793'])
