@@ -277,7 +277,7 @@ describeOnEachEngine('today', (engine) => {
       ])
       expect(signals[0]).toMatchObject({ stake: '2 lots, 2 to decide', waiting: '50 days' })
       expect(signals[0]?.text).toContain('One more signal of the same lots.')
-      expect(signals[0]?.href).toMatch(/^\/drift\?product=L254#signal-\d+$/)
+      expect(signals[0]?.href).toMatch(/^\/drift\?product=L254&lot=L-2#signal-\d+$/)
       // Three signals, though two lines.
       expect(today.headline).toBe(
         'One lot is outside its tolerance, three signals wait for an answer, and ten more things wait.',
