@@ -85,10 +85,9 @@ export const inChartOrder = (
 ): number => a.madeAt - b.madeAt || (a.code < b.code ? -1 : a.code > b.code ? 1 : 0)
 
 /** The limit set that a lot made at this time is judged by: of those in force by then the newest. */
-export const limitsAt = (sets: readonly FrozenLimits[], madeAt: number): FrozenLimits | undefined =>
-  sets
-    .filter((set) => set.effectiveFrom <= madeAt)
-    .reduce<FrozenLimits | undefined>(
-      (newest, set) => (newest === undefined || set.number > newest.number ? set : newest),
-      undefined,
-    )
+export const limitsAt = (sets: readonly FrozenLimits[], madeAt: number): FrozenLimits | undefined => {
+  let newest: FrozenLimits | undefined
+  for (const set of sets)
+    if (set.effectiveFrom <= madeAt && (newest === undefined || set.number > newest.number)) newest = set
+  return newest
+}

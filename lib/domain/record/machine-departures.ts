@@ -1,12 +1,13 @@
 import { findSignals } from '../control/find-signals'
 import type { RulePoint } from '../control/rule-point'
-import { isAsked, limitsFor } from './chart-departures'
+import { isAsked } from './chart-departures'
 import {
   type ChartHistory,
   type ChartPoint,
   type FrozenLimits,
   inChartOrder,
   limitsAt,
+  targetShift,
 } from './chart-history'
 import type { RaisedSignal } from './reconcile-signals'
 
@@ -35,7 +36,7 @@ export function standardisedPoints(
       points.flatMap((point): StandardisedPoint[] => {
         const set = point.machineId === machineId ? limitsAt(limitSets, point.madeAt) : undefined
         if (!set || !(set.sigma > 0)) return []
-        const z = (point.value - limitsFor(set, point).centre) / set.sigma
+        const z = (point.value - (set.centre + targetShift(set, point))) / set.sigma
         return [{ ...point, productId, set, z, leftOut: set.leftOut.includes(point.lotId) }]
       }),
     )
@@ -51,6 +52,9 @@ export function machineDepartures(
   machineId: number,
   charts: readonly ProductChart[],
 ): readonly RaisedSignal[] {
+  // Runs of one product are that product's own; most machines are asked for nothing more.
+  if (charts.filter(({ limitSets, points }) => limitSets.length > 0 && points.length > 0).length < 2)
+    return []
   const points = standardisedPoints(machineId, charts)
   const rulePoints = points.map(
     ({ leftOut, set, z }): RulePoint => ({
