@@ -1,6 +1,7 @@
 import { type ChildProcess, spawn } from 'node:child_process'
 import { createInterface } from 'node:readline'
 import { setTimeout as pause } from 'node:timers/promises'
+import { build } from 'esbuild'
 import { beforeAll, describe, expect, it } from 'vitest'
 import { openSqlite } from '@/lib/data/connections'
 import { filePath } from '@/lib/data/env'
@@ -20,6 +21,22 @@ const lots = Math.max(1000, Math.round(20_000 * share))
 const kills = Math.max(2, Math.round(10 * share))
 const seed = 20_261_202
 
+/** The host as one plain file: what loads TypeScript would be in its memory, too. */
+const hostFile = 'build/test/import-host.mjs'
+
+const buildHost = () =>
+  build({
+    entryPoints: ['test/support/import-host.ts'],
+    outfile: hostFile,
+    bundle: true,
+    platform: 'node',
+    format: 'esm',
+    target: 'node20',
+    packages: 'external',
+    tsconfig: 'tsconfig.json',
+    logLevel: 'warning',
+  })
+
 interface Host {
   readonly child: ChildProcess
   readonly address: string
@@ -27,7 +44,7 @@ interface Host {
 }
 
 async function startHost(works: SteelWorks): Promise<Host> {
-  const child = spawn(process.execPath, ['--import', 'tsx', 'test/support/import-host.ts'], {
+  const child = spawn(process.execPath, [hostFile], {
     stdio: ['ignore', 'pipe', 'inherit'],
     env: { ...process.env, NODE_OPTIONS: '', ACTOR: JSON.stringify(works.quality) },
   })
@@ -120,6 +137,7 @@ describe('an import whose process is killed over and over', () => {
   const rows = rowsOfLots(lots, day(21), 'LOT-2026', 11)
   beforeAll(async () => {
     await buildWorkers(process.cwd())
+    await buildHost()
     works = await setUpManyLots()
     const view = await sendFile(works.bench, csvOf(rows))
     await begin(works.bench, view)

@@ -2,7 +2,6 @@ import { randomBytes } from 'node:crypto'
 import type { BulkConnection, BulkRow } from '@/lib/data/bulk/bulk-connection'
 import { bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
 import type { PlannedLot } from '@/lib/data/bulk/store-batch'
-import { loadChartHistories, loadMachineCharts } from '@/lib/data/chart-histories'
 import type { Tx } from '@/lib/data/database'
 import { findCurrentDisposition, unmarkedRevisionsOf } from '@/lib/data/dispositions'
 import { sha256 } from '@/lib/data/hash'
@@ -12,16 +11,14 @@ import type { Problem } from '@/lib/domain/errors'
 import { admitEntry } from '@/lib/domain/record/admit-entry'
 import { canonicalJson } from '@/lib/domain/record/canonical-json'
 import type { ChartHistory } from '@/lib/domain/record/chart-history'
-import { chartsAfter, machineSignalsAfter, type SignalId } from '@/lib/domain/record/charts-after'
 import { isFinal } from '@/lib/domain/record/lot-state'
 import { planSpecimenWrite } from '@/lib/domain/record/plan-specimen-write'
 import type { RaisedSignal } from '@/lib/domain/record/reconcile-signals'
-import type { LotWriteState, MachineSignals, SpecimenEntry } from '@/lib/domain/record/write-state'
+import type { LotWriteState, SpecimenEntry } from '@/lib/domain/record/write-state'
 import type { BenchRow } from '@/lib/input/bench-file/bench-row'
 import { clientIdFrom } from '@/lib/input/client-id'
-import { type LoadedFacts, loadFacts } from '../evaluation-facts'
 import { entryFromRow } from './entry-from-row'
-import { type ImportLookups, loadLookups } from './lookups'
+import { KnownWorks } from './known-works'
 import { contradictions, openFromRow } from './open-from-row'
 
 /** A row of the file that was understood, with its place. */
@@ -66,7 +63,7 @@ export interface Importer {
  * made outside the write transaction, because evaluating takes most of the time.
  */
 export class BatchPlanner {
-  private known: Known | undefined
+  private known: KnownWorks | undefined
 
   constructor(
     private readonly read: Tx,
@@ -114,21 +111,14 @@ export class BatchPlanner {
   }
 
   /** What is remembered, or everything read anew when somebody has written since. */
-  private async fresh(): Promise<Known> {
+  private async fresh(): Promise<KnownWorks> {
     const { count } = await bulkLedgerHead(this.connection)
-    if (this.known?.ledgerCount !== count)
-      this.known = {
-        ledgerCount: count,
-        lookups: await loadLookups(this.read),
-        facts: new Map(),
-        charts: new Map(),
-        machines: new Map(),
-      }
+    if (this.known?.ledgerCount !== count) this.known = await KnownWorks.at(this.read, count)
     return this.known
   }
 
   private async findOrOpen(
-    known: Known,
+    known: KnownWorks,
     code: string,
     group: readonly ReadRow[],
     id: number,
@@ -137,7 +127,7 @@ export class BatchPlanner {
   ): Promise<FoundLot | undefined> {
     const there = await findLotByCode(this.read, code)
     if (there) {
-      const { facts } = await this.factsOf(known, there.specificationRevisionId)
+      const { facts } = await known.factsOf(there.specificationRevisionId)
       const specimens = await loadSpecimens(this.read, there.id, known.lookups.equipment)
       const disposition = await findCurrentDisposition(this.read, there.id)
       return {
@@ -161,7 +151,7 @@ export class BatchPlanner {
         continue
       }
       const { lot, materials, row } = opened.value
-      const { facts } = await this.factsOf(known, lot.specificationRevisionId)
+      const { facts } = await known.factsOf(lot.specificationRevisionId)
       return {
         lot,
         opens: row,
@@ -176,7 +166,7 @@ export class BatchPlanner {
 
   /** Entries of the rows that can be stored or are there already; the others are set aside. */
   private entriesOf(
-    known: Known,
+    known: KnownWorks,
     { base, from, lot }: FoundLot,
     group: readonly ReadRow[],
     at: number,
@@ -210,16 +200,14 @@ export class BatchPlanner {
   }
 
   private async planLot(
-    known: Known,
+    known: KnownWorks,
     { base, lot, materials, opens, specimenIds }: FoundLot,
     entries: readonly SpecimenEntry[],
     at: number,
   ): Promise<PlannedLot> {
-    const charts = await this.chartsOf(known, lot.product.id)
+    const charts = await known.chartsOf(lot.product.id)
     const machine =
-      lot.machine && charts.length > 0
-        ? await this.machineOf(known, lot.machine.id, lot.product.id)
-        : undefined
+      lot.machine && charts.length > 0 ? await known.machineOf(lot.machine.id, lot.product.id) : undefined
     const state = stateOf(lot, base, charts, machine)
     const planned = planSpecimenWrite(state, entries, { personId: this.importer.personId }, at, sha256)
     if (!planned.ok) throw new Error(planned.problems.map((one) => one.message).join(' '))
@@ -229,74 +217,8 @@ export class BatchPlanner {
     const signalIds = new Map(
       raised.map((one, index): [RaisedSignal, number] => [one, ids[index] ?? Number.NaN]),
     )
-    const idOf: SignalId = (one) => signalIds.get(one) ?? Number.NaN
-    known.charts.set(lot.product.id, chartsAfter(state, plan, idOf))
-    if (machine) known.machines.get(machine.id)?.settle(machineSignalsAfter(machine, plan, idOf))
+    known.settle(state, plan, (one) => signalIds.get(one) ?? Number.NaN)
     return { opens, materials, plan, specimenIds, signalIds }
-  }
-
-  private async factsOf(known: Known, revisionId: number): Promise<LoadedFacts> {
-    const facts =
-      known.facts.get(revisionId) ?? (await loadFacts(this.read, revisionId, known.lookups.equipment))
-    known.facts.set(revisionId, facts)
-    return facts
-  }
-
-  private async chartsOf(known: Known, productId: number): Promise<readonly ChartHistory[]> {
-    const charts = known.charts.get(productId) ?? (await loadChartHistories(this.read, productId))
-    known.charts.set(productId, charts)
-    return charts
-  }
-
-  /** Charts of everything else that a machine makes, this batch's lots among them. */
-  private async machineOf(
-    known: Known,
-    machineId: number,
-    butProductId: number,
-  ): Promise<NonNullable<LotWriteState['machine']>> {
-    let machine = known.machines.get(machineId)
-    if (!machine) {
-      const loaded = await loadMachineCharts(this.read, machineId)
-      for (const { charts, productId } of loaded.products)
-        if (!known.charts.has(productId)) known.charts.set(productId, charts)
-      machine = new KnownMachine(
-        loaded.products.map((one) => one.productId),
-        loaded.signals,
-      )
-      known.machines.set(machineId, machine)
-    }
-    machine.products.add(butProductId)
-    return {
-      id: machineId,
-      products: [...machine.products]
-        .filter((productId) => productId !== butProductId)
-        .sort((a, b) => a - b)
-        .map((productId) => ({ productId, charts: known.charts.get(productId) ?? [] })),
-      signals: machine.signals,
-    }
-  }
-}
-
-interface Known {
-  ledgerCount: number
-  readonly lookups: ImportLookups
-  readonly facts: Map<number, LoadedFacts>
-  readonly charts: Map<number, readonly ChartHistory[]>
-  readonly machines: Map<number, KnownMachine>
-}
-
-class KnownMachine {
-  readonly products: Set<number>
-
-  constructor(
-    products: readonly number[],
-    public signals: readonly MachineSignals[],
-  ) {
-    this.products = new Set(products)
-  }
-
-  settle(signals: readonly MachineSignals[]): void {
-    this.signals = signals
   }
 }
 
