@@ -37,7 +37,7 @@ test('quality sees one line for an event, and its link opens the signal', async 
   expect(await kindsOn(page)).not.toContain('lot-to-measure')
   const href = (await event.getByRole('link').getAttribute('href')) ?? ''
   await event.getByRole('link').click()
-  await expect(page).toHaveURL(/\/drift\?product=LARCH-279#signal-\d+$/)
+  await expect(page).toHaveURL(/\/drift\?product=LARCH-279&lot=LC-\d+#signal-\d+$/)
   await expect(page.locator(href.slice(href.indexOf('#')))).toHaveAttribute('data-state', 'open')
 })
 
