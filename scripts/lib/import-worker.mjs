@@ -3,7 +3,7 @@ import { join } from 'node:path'
 import { Worker } from 'node:worker_threads'
 
 /** A run needs little memory; one that needs more is ended rather than the server. */
-const limits = { maxOldGenerationSizeMb: 256, maxYoungGenerationSizeMb: 24 }
+const limits = { maxOldGenerationSizeMb: 192, maxYoungGenerationSizeMb: 12 }
 
 /** A spreadsheet unpacks in memory: as much as one may need, and no more. */
 const sheetLimits = { maxOldGenerationSizeMb: 1024 }
