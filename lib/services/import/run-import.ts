@@ -16,6 +16,7 @@ import { type ImportOptions, layoutOf } from '@/lib/input/bench-file/layout'
 import { placedIn } from '@/lib/input/bench-file/row-problem'
 import { BatchPlanner, type Importer, type PlannedBatch, type ReadRow, type SetAside } from './batch-planner'
 import { type FileRow, readFileRows } from './file-rows'
+import { LinesOfSpecimens } from './lines-of-specimens'
 
 export interface ImportRun {
   readonly read: Tx
@@ -126,7 +127,7 @@ class RowReader {
   private headers: readonly string[] = []
   private columns: readonly BenchColumn[] = []
   /** Where each specimen of the file stands. */
-  private readonly lines = new Map<string, number>()
+  private readonly lines = new LinesOfSpecimens()
 
   constructor(
     private readonly options: ImportOptions,
@@ -159,8 +160,7 @@ class RowReader {
     })
     if (!bench.ok) return setAside(record, record.cells, '', undefined, bench.problems)
     const { lot, specimen } = bench.value
-    const key = `${lot}\n${specimen}`
-    const before = this.lines.get(key)
+    const before = this.lines.find(lot, specimen)
     if (before !== undefined)
       return setAside(record, record.cells, lot, specimen, [
         {
@@ -171,7 +171,7 @@ class RowReader {
           details: { value: String(specimen) },
         },
       ])
-    this.lines.set(key, line)
+    this.lines.note(lot, specimen, line)
     return { row, line, cells: record.cells, bench: bench.value }
   }
 }
