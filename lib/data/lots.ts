@@ -1,4 +1,5 @@
 import type { LotState } from '@/lib/domain/record/lot-state'
+import type { LotWriteState } from '@/lib/domain/record/write-state'
 import type { Tx } from './database'
 import { searchKeyOf } from './equipment-store'
 
@@ -85,6 +86,19 @@ const rowOf = (row: Selected): LotRow => ({
   makerId: row.makerId ?? undefined,
   machine: row.machine ?? undefined,
   die: row.die ?? undefined,
+})
+
+/** A lot as the plan of a further entry needs it. */
+export const lotWriteStateOf = (lot: LotRow): LotWriteState['lot'] => ({
+  id: lot.id,
+  code: lot.code,
+  state: lot.state,
+  version: lot.version,
+  evidenceChanged: lot.evidenceChanged,
+  productId: lot.product.id,
+  machineId: lot.machine?.id ?? null,
+  madeAt: lot.madeAt,
+  ...(lot.measuredAt === undefined ? {} : { measuredAt: lot.measuredAt }),
 })
 
 export const findLotId = async (tx: Tx, code: string): Promise<number | undefined> =>
@@ -184,9 +198,6 @@ export const listLotRows = async (
       take,
     })
   ).map(({ _count, ...row }) => ({ ...rowOf(row), specimenCount: _count.specimens }))
-
-export const countLotRows = (tx: Tx, filter: LotFilter): Promise<number> =>
-  tx.lot.count({ where: whereOf(filter) })
 
 /** Codes by id. */
 export const listLotCodes = async (tx: Tx, ids: readonly number[]): Promise<ReadonlyMap<number, string>> => {

@@ -38,7 +38,8 @@ function cellText(cell: CsvCell, { separator, decimal }: CsvStyle): string {
   return quoted(formulaLike.test(cell) ? `'${cell}` : cell, separator)
 }
 
-const quoted = (text: string, separator: string): string =>
+/** A cell between quotes where it needs them (RFC 4180); its content stays as it is, formulas too. */
+export const quoted = (text: string, separator: string): string =>
   text.includes(separator) || /["\r\n]/.test(text) || /^\s|\s$/.test(text)
     ? `"${text.replaceAll('"', '""')}"`
     : text

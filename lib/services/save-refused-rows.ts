@@ -5,6 +5,7 @@ import { requireEnvironment } from '@/lib/data/env'
 import { findImport, listSetAside } from '@/lib/data/imports'
 import { type Problem, problem } from '@/lib/domain/errors'
 import type { ImportOptions } from '@/lib/input/bench-file/layout'
+import { quoted } from '@/lib/output/csv'
 import { headersOf } from './import/file-rows'
 import { importPath } from './import/work-through'
 
@@ -58,6 +59,3 @@ const REASON = 'refused_because'
 
 const sentence = ({ mend, message, where }: Problem): string =>
   [where === undefined ? '' : `${where}:`, message, mend ?? ''].filter((part) => part !== '').join(' ')
-
-const quoted = (cell: string, delimiter: string): string =>
-  cell.includes(delimiter) || /["\r\n]/.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell

@@ -3,7 +3,7 @@ import type { Tx } from '@/lib/data/database'
 import { findCurrentDisposition, unmarkedRevisionsOf } from '@/lib/data/dispositions'
 import { type KnownEquipment, loadEquipment } from '@/lib/data/evaluation-facts'
 import { lockRow } from '@/lib/data/locks'
-import type { LotRow } from '@/lib/data/lots'
+import { type LotRow, lotWriteStateOf } from '@/lib/data/lots'
 import { loadSpecimens, specimenStateOf } from '@/lib/data/specimens'
 import type { LotWriteState } from '@/lib/domain/record/write-state'
 import { loadFacts } from './evaluation-facts'
@@ -30,17 +30,7 @@ export async function loadWriteState(
   return {
     equipment,
     state: {
-      lot: {
-        id: lot.id,
-        code: lot.code,
-        state: lot.state,
-        version: lot.version,
-        evidenceChanged: lot.evidenceChanged,
-        productId: lot.product.id,
-        machineId: lot.machine?.id ?? null,
-        madeAt: lot.madeAt,
-        ...(lot.measuredAt === undefined ? {} : { measuredAt: lot.measuredAt }),
-      },
+      lot: lotWriteStateOf(lot),
       facts,
       specimens: specimens.map(specimenStateOf),
       charts,

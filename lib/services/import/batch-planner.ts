@@ -4,8 +4,9 @@ import { bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
 import type { PlannedLot } from '@/lib/data/bulk/store-batch'
 import type { Tx } from '@/lib/data/database'
 import { findCurrentDisposition, unmarkedRevisionsOf } from '@/lib/data/dispositions'
+import type { KnownEquipment } from '@/lib/data/evaluation-facts'
 import { sha256 } from '@/lib/data/hash'
-import { findLotByCode, type LotRow } from '@/lib/data/lots'
+import { findLotByCode, type LotRow, lotWriteStateOf } from '@/lib/data/lots'
 import { loadSpecimens, specimenStateOf } from '@/lib/data/specimens'
 import type { Problem } from '@/lib/domain/errors'
 import { admitEntry } from '@/lib/domain/record/admit-entry'
@@ -48,6 +49,8 @@ export interface PlannedBatch {
   readonly stored: number
   readonly alreadyThere: number
   readonly lotsOpened: number
+  /** What the plans name by code, as it stood when they were made. */
+  readonly equipment: KnownEquipment
   /** Entries of the ledger that the plan rests on: when there are more, somebody wrote, and it is planned anew. */
   readonly ledgerCount: number
 }
@@ -107,7 +110,8 @@ export class BatchPlanner {
       stored += fresh.length
       if (found.opens) lotsOpened += 1
     }
-    return { lots, setAside, stored, alreadyThere, lotsOpened, ledgerCount: known.ledgerCount }
+    const { ledgerCount, lookups } = known
+    return { lots, setAside, stored, alreadyThere, lotsOpened, equipment: lookups.equipment, ledgerCount }
   }
 
   /** What is remembered, or everything read anew when somebody has written since. */
@@ -239,17 +243,7 @@ const stateOf = (
   machine: LotWriteState['machine'],
 ): LotWriteState => ({
   ...base,
-  lot: {
-    id: lot.id,
-    code: lot.code,
-    state: lot.state,
-    version: lot.version,
-    evidenceChanged: lot.evidenceChanged,
-    productId: lot.product.id,
-    machineId: lot.machine?.id ?? null,
-    madeAt: lot.madeAt,
-    ...(lot.measuredAt === undefined ? {} : { measuredAt: lot.measuredAt }),
-  },
+  lot: lotWriteStateOf(lot),
   charts,
   ...(machine ? { machine } : {}),
 })

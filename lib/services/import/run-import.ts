@@ -2,10 +2,10 @@ import { setImmediate as pause } from 'node:timers/promises'
 import type { BulkConnection } from '@/lib/data/bulk/bulk-connection'
 import { appendBulkLedger, bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
 import { bulkTables } from '@/lib/data/bulk/bulk-tables'
+import { endImport } from '@/lib/data/bulk/end-import'
 import { storeBatch } from '@/lib/data/bulk/store-batch'
 import type { Tx } from '@/lib/data/database'
 import { isBusy, isSerialisationFailure } from '@/lib/data/db-errors'
-import { loadEquipment } from '@/lib/data/evaluation-facts'
 import { sha256 } from '@/lib/data/hash'
 import { findImport, type ImportFacts } from '@/lib/data/imports'
 import type { Problem } from '@/lib/domain/errors'
@@ -93,34 +93,11 @@ async function endAsked(id: number, run: ImportRun): Promise<'cancelled' | 'stop
   return 'cancelled'
 }
 
-async function finish(
+const finish = (
   id: number,
   state: 'done' | 'cancelled',
   { connection, importer, now = Date.now }: ImportRun,
-) {
-  await connection.begin()
-  try {
-    const head = await bulkLedgerHead(connection, true)
-    const at = now()
-    await connection.run(
-      'UPDATE "Import" SET "state" = ?, "endedAt" = ?, "version" = "version" + 1 WHERE "id" = ?',
-      state,
-      connection.instant(at),
-      id,
-    )
-    await appendBulkLedger(connection, head, {
-      at,
-      personId: importer.personId,
-      verb: state === 'done' ? 'import-done' : 'import-cancelled',
-      subject: `import ${id}`,
-      body: {},
-    })
-    await connection.commit()
-  } catch (error) {
-    await connection.rollback()
-    throw error
-  }
-}
+) => endImport(connection, id, { state, at: now(), personId: importer.personId })
 
 /** Reads and checks rows, and remembers which specimens the file has named already. */
 class RowReader {
@@ -241,9 +218,9 @@ interface Storing {
 async function storePlanned(
   { id, sha256: file }: ImportFacts,
   { aside, at, batch, head, planned }: Storing,
-  { connection, importer, read }: ImportRun,
+  { connection, importer }: ImportRun,
 ): Promise<number> {
-  if (planned.lots.length > 0) await storeBatch(connection, planned.lots, await loadEquipment(read))
+  if (planned.lots.length > 0) await storeBatch(connection, planned.lots, planned.equipment)
   await connection.insert(
     bulkTables.importRow,
     aside.map(({ problems, cells, specimen, ...row }) => ({

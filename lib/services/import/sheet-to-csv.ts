@@ -1,5 +1,6 @@
 import { open, writeFile } from 'node:fs/promises'
 import readXlsxFile from 'read-excel-file/node'
+import { quoted } from '@/lib/output/csv'
 
 /** Most that a spreadsheet may unpack to, bytes, and most cells of its first sheet. */
 const MOST_BYTES = 300_000_000
@@ -38,10 +39,7 @@ export async function sheetToCsv(from: string, to: string): Promise<SheetOutcome
   return { ok: true }
 }
 
-const cellText = (cell: unknown): string => {
-  const text = textOf(cell)
-  return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text
-}
+const cellText = (cell: unknown): string => quoted(textOf(cell), ',')
 
 function textOf(cell: unknown): string {
   if (cell === null || cell === undefined) return ''

@@ -2,7 +2,7 @@ import { join } from 'node:path'
 import type { Role } from '@/lib/access/actor'
 import { may } from '@/lib/access/permit'
 import type { BulkConnection, BulkValue } from '@/lib/data/bulk/bulk-connection'
-import { appendBulkLedger, bulkLedgerHead } from '@/lib/data/bulk/bulk-ledger'
+import { endImport } from '@/lib/data/bulk/end-import'
 import type { Tx } from '@/lib/data/database'
 import { type ImportFacts, nextImport } from '@/lib/data/imports'
 import { getPerson } from '@/lib/data/people'
@@ -145,22 +145,10 @@ async function fail(
   { connection }: Pick<Workplace, 'connection'>,
 ): Promise<void> {
   await connection.rollback()
-  await connection.begin()
-  const head = await bulkLedgerHead(connection, true)
-  const at = Date.now()
-  await connection.run(
-    'UPDATE "Import" SET "state" = ?, "message" = ?, "endedAt" = ?, "version" = "version" + 1 WHERE "id" = ?',
-    'failed',
+  await endImport(connection, next.id, {
+    state: 'failed',
     message,
-    connection.instant(at),
-    next.id,
-  )
-  await appendBulkLedger(connection, head, {
-    at,
+    at: Date.now(),
     personId: next.createdById,
-    verb: 'import-failed',
-    subject: `import ${next.id}`,
-    body: { message },
   })
-  await connection.commit()
 }
